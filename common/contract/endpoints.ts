@@ -1,0 +1,30 @@
+import { bayEndpoints } from './bays';
+import { clientPageEndpoints } from './client-page';
+import { crewEndpoints } from './crew';
+import { daySheetEndpoints } from './day-sheet';
+import { feedEndpoints } from './feeds';
+import { libraryEndpoints } from './library';
+import { pieceEndpoints } from './pieces';
+import { planningEndpoints } from './planning';
+import { productionEndpoints } from './productions';
+import { purchaseEndpoints } from './purchases';
+import { sessionEndpoints } from './session';
+import { stageImportEndpoints } from './stage-import';
+import { studioEndpoints } from './studio';
+
+/** Every route of the API by name: OpenAPI, the server's router, the client's calls and the permission matrix read this. */
+export const endpoints = {
+  ...sessionEndpoints,
+  ...studioEndpoints,
+  ...crewEndpoints,
+  ...bayEndpoints,
+  ...libraryEndpoints,
+  ...productionEndpoints,
+  ...pieceEndpoints,
+  ...purchaseEndpoints,
+  ...stageImportEndpoints,
+  ...clientPageEndpoints,
+  ...planningEndpoints,
+  ...daySheetEndpoints,
+  ...feedEndpoints,
+};
