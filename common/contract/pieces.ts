@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { endpoint, OFFICE, WORKSHOP, ById } from './endpoint';
 import { Id, Instant, Minutes, Name, Note, Removal, Version } from './primitives';
+import { PieceView } from './piece';
 import { StageDraft, StageLink, StageView } from './stage';
 import { ProductionView } from './productions';
 
