@@ -133,7 +133,12 @@ export default defineConfig(
     rules: { 'no-console': 'off' },
   },
   {
-    files: ['*.{cjs,mjs}'],
+    // Plain Node before anything is installed; types are checked through JSDoc.
+    files: ['server/launch/*.{cjs,mjs}'],
+    languageOptions: { globals: globals.node },
+  },
+  {
+    files: ['*.{cjs,mjs}', 'server/launch/*.cjs'],
     extends: [eslint.configs.recommended],
     languageOptions: { globals: globals.node },
   },
