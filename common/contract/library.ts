@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { MATERIAL_MILESTONES } from '../domain/material';
 import { endpoint, OFFICE, WORKSHOP, ById } from './endpoint';
 import { Id, Minutes, Name, Note, Version } from './primitives';
 import { StageDraft } from './stage';
@@ -8,20 +9,12 @@ export const DwellLaw = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('none') }),
   z.object({ kind: z.literal('arrhenius'), activationEnergyJPerMol: z.number().positive().max(200_000) }),
   z.object({ kind: z.literal('factor-per-10-degrees'), factor: z.number().min(1).max(12) }),
+  z.object({ kind: z.literal('nurse-saul'), datumCelsius: z.number().min(-30).max(30) }),
   z.object({ kind: z.literal('evaporation') }),
 ]);
 export type DwellLaw = z.infer<typeof DwellLaw>;
 
-/** What a dwell waits for. */
-export const MATERIAL_MILESTONES = [
-  'pot-life',
-  'touch',
-  'demould',
-  'next-layer',
-  'next-layer-until',
-  'sandable',
-  'full-cure',
-] as const;
+export { MATERIAL_MILESTONES };
 
 /** Three times in minutes at the material's reference temperature and humidity. */
 export const ThreePoint = z
@@ -67,6 +60,10 @@ export const RecipeStep = z.object({
   stage: StageDraft,
   after: z.array(z.int().min(0)).max(20),
   each: z.enum(['once', 'cast', 'coat', 'mould']),
+  /** `makes`: from it on there is a mould; `fills`: it takes the mould of its cast, and holds it until `untilStep` has ended. */
+  mould: z.enum(['none', 'makes', 'fills']).default('none'),
+  /** The step (0-based, of the same cast) that lets go of the mould and of places held `until-stage`; null for the own dwell. */
+  untilStep: z.int().min(0).nullable().default(null),
 });
 export type RecipeStep = z.infer<typeof RecipeStep>;
 

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { KEY_DATE_KINDS } from '../domain/key-date';
 import { endpoint, OFFICE, WORKSHOP, ById } from './endpoint';
 import { PieceView } from './piece';
 import { Id, Instant, Name, Note, Removal, Version } from './primitives';
@@ -8,22 +9,18 @@ import { StageLink, StageView } from './stage';
 export const ClientView = z.object({ id: Id, name: z.string(), version: Version });
 export type ClientView = z.infer<typeof ClientView>;
 
-export const KEY_DATE_KINDS = [
-  'rehearsal-loan',
-  'delivery',
-  'get-in',
-  'fit-up',
-  'technical-rehearsal',
-  'dress-rehearsal',
-  'opening',
-] as const;
-export const KeyDateDraft = z.object({
+export { KEY_DATE_KINDS };
+const keyDateFields = {
   kind: z.enum(KEY_DATE_KINDS),
   at: Instant,
   strength: z.enum(['hard', 'wished']),
   weight: z.int().min(1).max(1000),
-});
-export const KeyDateView = KeyDateDraft.extend({ id: Id, productionId: Id, version: Version });
+  /** The pieces that have to be ready by it; empty for every piece of the production. */
+  pieceIds: z.array(Id).max(500),
+};
+export const KeyDateDraft = z.object({ ...keyDateFields, pieceIds: keyDateFields.pieceIds.default([]) });
+export const KeyDateChange = z.object(keyDateFields).partial().extend({ version: Version });
+export const KeyDateView = z.object({ ...keyDateFields, id: Id, productionId: Id, version: Version });
 export type KeyDateView = z.infer<typeof KeyDateView>;
 
 /** `tentative` productions are planned but promised to nobody; `delivered` and `declined` leave the plan. */
@@ -141,7 +138,7 @@ export const productionEndpoints = {
     who: OFFICE,
     summary: 'Move or change a key date',
     params: ById,
-    body: KeyDateDraft.partial().extend({ version: Version }),
+    body: KeyDateChange,
     response: KeyDateView,
   }),
   removeKeyDate: endpoint({

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { CONTINUITIES, STAGE_KINDS, STAGE_STATES } from '../domain/stage-draft';
 import { Id, Instant, Minutes, Name, Note, Version } from './primitives';
 
 /** Hands-on person-minutes: low, likely, high. */
@@ -35,9 +36,7 @@ export const PlaceWanted = z.object({
   untilStageId: Id.nullable(),
 });
 
-export const CONTINUITIES = ['session', 'shifts', 'free', 'clock'] as const;
-/** `make` is hands-on work; `sign-off` is a client's decision; `check` is a competent person's inspection or a load test. */
-export const STAGE_KINDS = ['make', 'sign-off', 'check', 'transport'] as const;
+export { CONTINUITIES, STAGE_KINDS, STAGE_STATES };
 
 /** What a recipe or a person says of a stage before it belongs to a piece. */
 export const StageDraft = z.object({
@@ -56,8 +55,6 @@ export const StageDraft = z.object({
   replyMinutes: Minutes,
 });
 export type StageDraft = z.infer<typeof StageDraft>;
-
-export const STAGE_STATES = ['to-do', 'started', 'paused', 'finished'] as const;
 
 export const StageView = StageDraft.extend({
   id: Id,
