@@ -1,2 +1,2 @@
 /** Jest's global tear-down of the projects that need PostgreSQL. */
-export default async function stopTestCluster(): Promise<void> {}
+export { stopTestCluster as default } from './test-cluster';

@@ -1,7 +1,7 @@
 // Plain Node without dependencies: this runs before anything is installed.
-import { spawnSync } from 'node:child_process';
-import { existsSync, readFileSync } from 'node:fs';
-import { join } from 'node:path';
+const { spawnSync } = require('node:child_process');
+const { existsSync, readFileSync } = require('node:fs');
+const { join } = require('node:path');
 
 /**
  * Why this Node.js is too old or of an unsuitable line, in one sentence, or undefined when it will do.
@@ -10,7 +10,7 @@ import { join } from 'node:path';
  * @param {string} version such as `20.19.0`
  * @returns {string | undefined}
  */
-export function nodeTrouble(version) {
+function nodeTrouble(version) {
   const [major = 0, minor = 0] = version.split('.').map(Number);
   if ((major === 20 && minor >= 19) || (major === 22 && minor >= 12) || major >= 24) return undefined;
   return `Fettle needs Node.js 20.19 or later of line 20, 22.12 or later of line 22, or 24 and later; this is ${version}.`;
@@ -22,7 +22,7 @@ export function nodeTrouble(version) {
  *
  * @param {string} root the project's folder
  */
-export function packagesFit(root) {
+function packagesFit(root) {
   const installed = readLock(join(root, 'node_modules', '.package-lock.json'));
   const asked = readLock(join(root, 'package-lock.json'));
   return Object.entries(asked).every(
@@ -37,7 +37,7 @@ export function packagesFit(root) {
  * @param {string} root the project's folder
  * @returns {string | undefined} one sentence when it failed
  */
-export function installPackages(root) {
+function installPackages(root) {
   console.error('Installing the packages that package-lock.json names; this takes a minute or two, once.');
   const args = ['ci', '--ignore-scripts', '--no-fund', '--no-audit', '--loglevel=error'];
   const npm = process.env['npm_execpath'];
@@ -61,3 +61,5 @@ function readLock(file) {
     return {};
   }
 }
+
+module.exports = { nodeTrouble, packagesFit, installPackages };
