@@ -1,13 +1,17 @@
-import { Client } from 'pg';
+import { bringUpToDate } from './bring-up-to-date';
+import { createDataSource } from './data-source';
 
-/**
- * Brings the database at DATABASE_URL to the present schema; with `--with-demo` fills an empty one with the demo
- * studio. Says on stdout who can sign in.
- */
+/** Brings the database at DATABASE_URL to the present schema and says on stdout what was done. */
 async function migrate(): Promise<void> {
-  const client = new Client({ connectionString: process.env['DATABASE_URL'] });
-  await client.connect();
-  await client.end();
+  const url = process.env['DATABASE_URL'];
+  if (!url) throw new Error('DATABASE_URL is not set: name the database to migrate.');
+  const dataSource = await createDataSource(url).initialize();
+  try {
+    const names = await bringUpToDate(dataSource);
+    for (const name of names) process.stdout.write(`Migrated: ${name}\n`);
+  } finally {
+    await dataSource.destroy();
+  }
 }
 
 migrate().catch((error: unknown) => {

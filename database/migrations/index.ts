@@ -1,0 +1,12 @@
+import { CrewAndClients1764547201000 } from './1764547201000-crew-and-clients';
+import { AccountsAndAudit1764547202000 } from './1764547202000-accounts-and-audit';
+import { WorkToBeDone1764547203000 } from './1764547203000-work-to-be-done';
+import { StudioAndPlans1764547204000 } from './1764547204000-studio-and-plans';
+
+/** Every migration in its order, listed by hand: a glob would not survive bundling. */
+export const migrations = [
+  CrewAndClients1764547201000,
+  AccountsAndAudit1764547202000,
+  WorkToBeDone1764547203000,
+  StudioAndPlans1764547204000,
+] as const;
