@@ -36,8 +36,8 @@ export class AuditEntry {
   sentence: string;
 
   @Column({ type: 'jsonb', nullable: true })
-  before: unknown;
+  before: object | null;
 
   @Column({ type: 'jsonb', nullable: true })
-  after: unknown;
+  after: object | null;
 }
