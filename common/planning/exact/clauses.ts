@@ -57,8 +57,10 @@ export class Clauses {
       clauses[kept] = offset;
       thresholds[kept++] = threshold;
     }
-    clauses.length = kept;
-    thresholds.length = kept;
+    if (kept < count) {
+      clauses.length = kept;
+      thresholds.length = kept;
+    }
     const { hasFailed } = this;
     this.hasFailed = false;
     return !hasFailed;
@@ -102,7 +104,8 @@ export class Clauses {
    */
   reduce(): void {
     const { data } = this;
-    const rank = (clause: Learnt): number => Math.min(clause.distinctLevels, 6) * 1000 - Math.min(999, data[clause.offset + 1]);
+    const rank = (clause: Learnt): number =>
+      Math.min(clause.distinctLevels, 6) * 1000 - Math.min(999, data[clause.offset + 1]);
     const ranked = [...this.learnt].sort((a, b) => rank(a) - rank(b) || b.offset - a.offset);
     const kept = new Set(ranked.slice(0, ranked.length >> 1));
     const literalsAt = (offset: number): number[] => {
@@ -112,7 +115,11 @@ export class Clauses {
     const fixed = this.fixed.map(literalsAt);
     const learnt = this.learnt
       .filter((clause) => kept.has(clause))
-      .map(({ offset, distinctLevels }) => ({ distinctLevels, used: data[offset + 1] >> 1, literals: literalsAt(offset) }));
+      .map(({ offset, distinctLevels }) => ({
+        distinctLevels,
+        used: data[offset + 1] >> 1,
+        literals: literalsAt(offset),
+      }));
     this.clear();
     for (const literals of fixed) if (!this.isTrueForGood(literals)) this.addFixed(literals);
     for (const { literals, distinctLevels, used } of learnt)

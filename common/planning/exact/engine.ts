@@ -25,6 +25,7 @@ export class Engine {
   private readonly propagators: Propagator[] = [];
   private readonly waiting: number[][];
   private readonly queue: number[] = [];
+  private queueHead = 0;
   private readonly isQueued: boolean[] = [];
   private head = 0;
   private isBroken = false;
@@ -106,8 +107,11 @@ export class Engine {
           this.queue.push(waiting[k]);
         }
       }
-      const next = this.queue.shift();
-      if (next === undefined) return true;
+      if (this.queueHead === this.queue.length) {
+        this.queue.length = this.queueHead = 0;
+        return true;
+      }
+      const next = this.queue[this.queueHead++];
       this.isQueued[next] = false;
       if (!this.propagators[next].propagate()) return false;
     }
@@ -135,7 +139,7 @@ export class Engine {
   backtrack(level: number): void {
     this.trail.backtrack(level);
     this.head = this.trail.length;
-    for (const index of this.queue) this.isQueued[index] = false;
-    this.queue.length = 0;
+    for (; this.queueHead < this.queue.length; this.queueHead++) this.isQueued[this.queue[this.queueHead]] = false;
+    this.queue.length = this.queueHead = 0;
   }
 }

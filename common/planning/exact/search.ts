@@ -32,6 +32,7 @@ export class Search {
   best: Int32Array | null = null;
   conflicts = 0;
   private readonly order: ActivityOrder;
+  private readonly starts: Int32Array;
   private readonly taker = { variable: 0, bound: 0 };
   private readonly phase: Int32Array;
   private restarts = 0;
@@ -44,6 +45,7 @@ export class Search {
     private readonly onBetter: (values: Int32Array) => void = () => undefined,
   ) {
     this.order = new ActivityOrder(engine.trail);
+    this.starts = Int32Array.from(goal.starts);
     this.phase = Int32Array.from({ length: engine.trail.value.length >> 1 }, (_, v) => engine.lower(v));
     for (const variable of goal.choices) this.phase[variable] = engine.upper(variable);
     engine.analyst.onInvolved = (side, bound) => this.order.bump(side, bound);
@@ -126,16 +128,23 @@ export class Search {
 
   /** The start that can be earliest, and of those the one that must be earliest: now. */
   private decideEarliest(): boolean {
-    const { engine } = this;
+    const { engine, starts } = this;
     const { value } = engine.trail;
     let chosen = -1;
-    for (const v of this.goal.starts) {
-      if (value[2 * v] + value[2 * v + 1] === 0) continue;
-      if (chosen < 0 || value[2 * v] < value[2 * chosen]) chosen = v;
-      else if (value[2 * v] === value[2 * chosen] && value[2 * v + 1] > value[2 * chosen + 1]) chosen = v;
+    let least = 0;
+    let latest = 0;
+    for (let k = 0; k < starts.length; k++) {
+      const v = starts[k];
+      const lower = value[2 * v];
+      const upper = -value[2 * v + 1];
+      if (lower === upper) continue;
+      if (chosen >= 0 && (lower > least || (lower === least && upper >= latest))) continue;
+      chosen = v;
+      least = lower;
+      latest = upper;
     }
     if (chosen < 0) return false;
-    engine.decide(2 * chosen + 1, -value[2 * chosen]);
+    engine.decide(2 * chosen + 1, -least);
     return true;
   }
 

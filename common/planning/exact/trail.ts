@@ -31,8 +31,10 @@ export class Trail {
   conflictKind: number = WRITTEN;
   conflictReason = 0;
 
-  private readonly levelEntry: number[] = [];
-  private readonly levelPremises: number[] = [];
+  /** Decisions made so far. */
+  level = 0;
+  private levelEntry = new Int32Array(256);
+  private levelPremises = new Int32Array(256);
 
   constructor(lower: readonly number[], upper: readonly number[]) {
     this.value = new Int32Array(2 * lower.length);
@@ -43,15 +45,14 @@ export class Trail {
     });
   }
 
-  /** Decisions made so far. */
-  get level(): number {
-    return this.levelEntry.length;
-  }
-
   /** Opens a decision level; what follows is undone together. */
   openLevel(): void {
-    this.levelEntry.push(this.length);
-    this.levelPremises.push(this.premisesEnd);
+    if (this.level === this.levelEntry.length) {
+      this.levelEntry = grown(this.levelEntry, this.level + 1);
+      this.levelPremises = grown(this.levelPremises, this.level + 1);
+    }
+    this.levelEntry[this.level] = this.length;
+    this.levelPremises[this.level++] = this.premisesEnd;
   }
 
   /**
@@ -74,7 +75,7 @@ export class Trail {
     this.reached[at] = bound;
     this.left[at] = value[side];
     this.previous[at] = this.latest[side];
-    this.levelAt[at] = this.levelEntry.length;
+    this.levelAt[at] = this.level;
     this.reasonKind[at] = kind;
     this.reason[at] = reason;
     this.latest[side] = at;
@@ -84,7 +85,7 @@ export class Trail {
 
   /** Undoes all levels above one. */
   backtrack(level: number): void {
-    if (level >= this.levelEntry.length) return;
+    if (level >= this.level) return;
     const keep = this.levelEntry[level];
     for (let at = this.length - 1; at >= keep; at--) {
       const side = this.side[at];
@@ -93,8 +94,7 @@ export class Trail {
     }
     this.length = keep;
     this.premisesEnd = this.levelPremises[level];
-    this.levelEntry.length = level;
-    this.levelPremises.length = level;
+    this.level = level;
   }
 
   /** At level 0: takes what is true as given, so that it is never explained again. */
