@@ -1,14 +1,17 @@
-import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { RouterOutlet } from '@angular/router';
+import { Appearance } from './shell/appearance';
 
-/** The shell around every page. */
+/** The root: what is shown is the router's to say. */
 @Component({
   selector: 'fettle-root',
   changeDetection: ChangeDetectionStrategy.OnPush,
   imports: [RouterOutlet],
-  template: `
-    <header><h1>Fettle</h1></header>
-    <main><router-outlet /></main>
-  `,
+  template: '<router-outlet />',
 })
-export class App {}
+export class App {
+  constructor() {
+    // Made here so that a kept choice of light or dark holds before any page is shown.
+    inject(Appearance);
+  }
+}

@@ -1,4 +1,40 @@
-import type { Routes } from '@angular/router';
+import { inject } from '@angular/core';
+import { Router, type Routes } from '@angular/router';
+import { OFFICE } from '@common/contract';
+import { homeOf, onlyFor, SessionStore, signedIn, signedOut } from './session';
+import { NotFoundPage } from './shell/not-found-page';
+import { Shell } from './shell/shell';
 
-/** Each feature adds its own routes here, loaded when first visited. */
-export const routes: Routes = [];
+/** The pages of somebody who is signed in; each feature brings its own routes, loaded when first visited. */
+const pages: Routes = [
+  {
+    path: '',
+    pathMatch: 'full',
+    canActivate: [() => inject(Router).parseUrl(homeOf(inject(SessionStore).role() ?? 'client'))],
+    children: [],
+  },
+  { path: 'plan', title: 'Plan', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./plan') },
+  { path: 'dates', title: 'Dates', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./dates') },
+  { path: 'load', title: 'Load', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./load') },
+];
+
+/** Every address of the application. */
+export const routes: Routes = [
+  {
+    path: 'sign-in',
+    title: 'Sign in',
+    canActivate: [signedOut],
+    loadComponent: () => import('./session/sign-in-page').then((file) => file.SignInPage),
+  },
+  {
+    path: 'unreachable',
+    title: 'The studio can’t be reached',
+    loadComponent: () => import('./session/unreachable-page').then((file) => file.UnreachablePage),
+  },
+  {
+    path: '',
+    component: Shell,
+    canActivate: [signedIn],
+    children: [...pages, { path: '**', title: 'There is nothing here', component: NotFoundPage }],
+  },
+];

@@ -1,0 +1,5 @@
+import type { Routes } from '@angular/router';
+
+/** The addresses below /load. */
+const routes: Routes = [];
+export default routes;

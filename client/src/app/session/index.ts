@@ -1,0 +1,4 @@
+export { homeOf, safeReturn } from './home';
+export { onlyFor, signedIn, signedOut } from './session-guard';
+export { sessionInterceptor } from './session-interceptor';
+export { SessionStore, type Account } from './session-store';

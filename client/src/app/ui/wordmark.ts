@@ -1,0 +1,30 @@
+import { ChangeDetectionStrategy, Component } from '@angular/core';
+
+/** The name, set so that one trued line crosses both t's. Takes the size of the text around it. */
+@Component({
+  selector: 'fettle-wordmark',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  template: `<span class="visually-hidden">Fettle</span
+    ><span aria-hidden="true">Fe<span class="trued">tt</span>le</span>`,
+  styles: `
+    :host {
+      font-weight: 700;
+      font-size: 1.5rem;
+      letter-spacing: -0.03em;
+      line-height: 1;
+      color: var(--ink);
+    }
+    .trued {
+      position: relative;
+    }
+    .trued::after {
+      content: '';
+      position: absolute;
+      inset-inline: -0.14em -0.1em;
+      top: 0.335em;
+      height: 0.115em;
+      background: var(--oxide);
+    }
+  `,
+})
+export class Wordmark {}
