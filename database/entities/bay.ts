@@ -1,4 +1,4 @@
-import { Check, Column, Entity, JoinColumn, ManyToOne, OneToMany, PrimaryColumn, Unique, type Relation } from 'typeorm';
+import { Check, Column, Entity, Index, JoinColumn, ManyToOne, OneToMany, PrimaryColumn, type Relation } from 'typeorm';
 import { BayOpening } from './bay-opening';
 import { Piece } from './piece';
 
@@ -9,9 +9,9 @@ export interface BaySizeValue {
   readonly heightMm: number | null;
 }
 
-/** A place or a machine that work occupies, or the mould of a piece. */
+/** A place or a machine that work occupies, or the mould of a piece. Names are unique but for moulds, which their piece tells apart. */
 @Entity({ name: 'bay' })
-@Unique('bay_name_key', ['name'])
+@Index('bay_name_key', { synchronize: false })
 @Check(
   'bay_kind_check',
   `kind in ('booth', 'welding', 'hot-wire', 'table', 'oven', 'floor', 'store', 'mould', 'other')`,

@@ -8,6 +8,8 @@ import { RecipeStepPlace } from './recipe-step-place';
 @Entity({ name: 'recipe_step' })
 @Unique('recipe_step_position_key', ['recipeId', 'position'])
 @Check('recipe_step_each_check', `each in ('once', 'cast', 'coat', 'mould')`)
+@Check('recipe_step_mould_check', `mould in ('none', 'makes', 'fills')`)
+@Check('recipe_step_until_position_check', 'until_position > position')
 @Check('recipe_step_kind_check', `kind in ('make', 'sign-off', 'check', 'transport')`)
 @Check('recipe_step_continuity_check', `continuity in ('session', 'shifts', 'free', 'clock')`)
 @Check(
@@ -36,6 +38,13 @@ export class RecipeStep extends DraftColumns {
 
   @Column({ type: 'text' })
   each: 'once' | 'cast' | 'coat' | 'mould';
+
+  @Column({ type: 'text', default: 'none' })
+  mould: 'none' | 'makes' | 'fills';
+
+  /** The later step whose end lets go of the mould and of places held until a stage; null for the own dwell's end. */
+  @Column({ type: 'integer', nullable: true })
+  untilPosition: number | null;
 
   @OneToMany(() => RecipeStepCrew, (crew) => crew.step)
   crew: Relation<RecipeStepCrew>[];

@@ -118,12 +118,14 @@ export class WorkToBeDone1764547203000 implements MigrationInterface {
         note text not null default '',
         active boolean not null default true,
         version integer not null default 1,
-        constraint bay_name_key unique (name),
         constraint bay_piece_check check (piece_id is null or kind = 'mould'),
         constraint bay_humidity_percent_check check (humidity_percent between 0 and 100),
         constraint bay_capacity_check check (capacity between 1 and 50),
         constraint bay_kind_check check (kind in ('booth', 'welding', 'hot-wire', 'table', 'oven', 'floor', 'store', 'mould', 'other'))
       )
+    `);
+    await queryRunner.query(`
+      create unique index bay_name_key on bay (name) where kind <> 'mould'
     `);
     await queryRunner.query(`
       create table bay_opening (
@@ -164,6 +166,8 @@ export class WorkToBeDone1764547203000 implements MigrationInterface {
         position integer not null,
         after integer[] not null default '{}',
         each text not null,
+        mould text not null default 'none',
+        until_position integer,
         constraint recipe_step_position_key unique (recipe_id, position),
         constraint recipe_step_dwell_check check ((dwell_minutes is null) = (dwell_attended_minutes is null)),
         constraint recipe_step_dwell_minutes_check check (dwell_minutes >= 0 and dwell_attended_minutes >= 0),
@@ -171,6 +175,8 @@ export class WorkToBeDone1764547203000 implements MigrationInterface {
         constraint recipe_step_hands_on_check check (0 <= low_minutes and low_minutes <= likely_minutes and likely_minutes <= high_minutes),
         constraint recipe_step_continuity_check check (continuity in ('session', 'shifts', 'free', 'clock')),
         constraint recipe_step_kind_check check (kind in ('make', 'sign-off', 'check', 'transport')),
+        constraint recipe_step_until_position_check check (until_position > position),
+        constraint recipe_step_mould_check check (mould in ('none', 'makes', 'fills')),
         constraint recipe_step_each_check check (each in ('once', 'cast', 'coat', 'mould'))
       )
     `);
