@@ -11,6 +11,7 @@ import { IssuedOccupancy } from './issued-occupancy';
 import { IssuedPlan } from './issued-plan';
 import { IssuedShift } from './issued-shift';
 import { KeyDate } from './key-date';
+import { KeyDatePiece } from './key-date-piece';
 import { Leave } from './leave';
 import { LevelRun } from './level-run';
 import { Link } from './link';
@@ -52,6 +53,7 @@ export * from './issued-occupancy';
 export * from './issued-plan';
 export * from './issued-shift';
 export * from './key-date';
+export * from './key-date-piece';
 export * from './leave';
 export * from './level-run';
 export * from './link';
@@ -95,6 +97,7 @@ export const entities = [
   IssuedPlan,
   IssuedShift,
   KeyDate,
+  KeyDatePiece,
   Leave,
   LevelRun,
   Link,

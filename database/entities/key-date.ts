@@ -1,4 +1,5 @@
-import { Check, Column, Entity, Index, JoinColumn, ManyToOne, PrimaryColumn, type Relation } from 'typeorm';
+import { Check, Column, Entity, Index, JoinColumn, ManyToOne, OneToMany, PrimaryColumn, type Relation } from 'typeorm';
+import { KeyDatePiece } from './key-date-piece';
 import { Production } from './production';
 
 /** A date of a production by which it has to be ready. */
@@ -35,4 +36,8 @@ export class KeyDate {
 
   @Column({ type: 'integer', default: 1 })
   version: number;
+
+  /** The pieces that have to be ready by it; none for every piece of the production. */
+  @OneToMany(() => KeyDatePiece, (piece) => piece.keyDate)
+  pieces: Relation<KeyDatePiece>[];
 }

@@ -6,6 +6,7 @@ export type DwellLawValue =
   | { readonly kind: 'none' }
   | { readonly kind: 'arrhenius'; readonly activationEnergyJPerMol: number }
   | { readonly kind: 'factor-per-10-degrees'; readonly factor: number }
+  | { readonly kind: 'nurse-saul'; readonly datumCelsius: number }
   | { readonly kind: 'evaporation' };
 
 /** What a dwell waits for. */

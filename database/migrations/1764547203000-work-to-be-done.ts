@@ -106,6 +106,13 @@ export class WorkToBeDone1764547203000 implements MigrationInterface {
       create index piece_production_id_idx on piece (production_id)
     `);
     await queryRunner.query(`
+      create table key_date_piece (
+        key_date_id uuid not null references key_date on delete cascade,
+        piece_id uuid not null references piece on delete cascade,
+        primary key (key_date_id, piece_id)
+      )
+    `);
+    await queryRunner.query(`
       create table bay (
         id uuid primary key,
         name text not null,
@@ -389,6 +396,7 @@ export class WorkToBeDone1764547203000 implements MigrationInterface {
     await queryRunner.query(`drop table recipe_step`);
     await queryRunner.query(`drop table bay_opening`);
     await queryRunner.query(`drop table bay`);
+    await queryRunner.query(`drop table key_date_piece`);
     await queryRunner.query(`drop table piece`);
     await queryRunner.query(`drop table key_date`);
     await queryRunner.query(`drop table production`);
