@@ -4,6 +4,8 @@ import type { TimeArc, TimeNetwork } from './time-network';
 /** What longest paths through a network give: the earliest or latest instant of each node, or arcs that cannot all hold. */
 export interface PathResult {
   readonly instants: Float64Array;
+  /** By node: the arc that gave its instant, null where that was given. */
+  readonly parents: readonly (TimeArc | null)[];
   /** A cycle of arcs that asks an instant to be after itself, in the order of time; null where there is none. */
   readonly cycle: readonly TimeArc[] | null;
 }
@@ -65,11 +67,11 @@ function correctLabels(
       }
     if (round % 8 === 7) {
       const cycle = impossibleCycle(parents, (arc) => (target(arc) === arc.to ? arc.from : arc.to));
-      if (cycle !== null) return { instants: labels, cycle };
+      if (cycle !== null) return { instants: labels, parents, cycle };
     }
     current = [...queued];
   }
-  return { instants: labels, cycle: null };
+  return { instants: labels, parents, cycle: null };
 }
 
 /**

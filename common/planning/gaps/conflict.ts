@@ -1,0 +1,100 @@
+import { criticalPath, type CycleStep } from '../bounds/critical-path';
+import { earliestInstants } from '../bounds/longest-paths';
+import { startNode, stageOfNode, timeNetwork, type TimeArc, type TimeNetwork } from '../bounds/time-network';
+import type { Minute } from '../../time/span';
+import type { Link } from '../problem/link';
+import type { Problem, Stage } from '../problem/problem';
+import { collision } from './collision';
+
+/** What a search for a conflict may spend. */
+export interface ConflictBudget {
+  /** Conflicts of exact search for each question asked. */
+  readonly maxConflicts: number;
+  readonly shouldStop: () => boolean;
+}
+
+/** What says that a stage may not be later: the end of the horizon, its latest end, a visit or a pin. */
+export type LateLimit = 'horizon' | 'latest' | 'fixed' | 'pin' | 'progress';
+
+/**
+ * Requirements that cannot all be kept, none of which could be left out: the smallest such set found, as data. `say-unmet`
+ * makes the sentence.
+ *
+ * - `cycle`: gaps round a ring of stages that ask an instant to be `excessMinutes` after itself.
+ * - `too-late`: a chain from `notBefore` on that leads past what the last stage's limit allows, by `excessMinutes`.
+ * - `collision`: stages that time keeps close together and that ask for more than the bays or crafts have.
+ */
+export type Conflict =
+  | { readonly kind: 'cycle'; readonly steps: readonly CycleStep[]; readonly excessMinutes: number }
+  | {
+      readonly kind: 'too-late';
+      readonly steps: readonly CycleStep[];
+      readonly notBefore: Minute;
+      readonly firstStageId: string;
+      readonly stageId: string;
+      readonly limit: LateLimit;
+      readonly notAfter: Minute;
+      readonly excessMinutes: number;
+    }
+  | {
+      readonly kind: 'collision';
+      readonly stageIds: readonly string[];
+      readonly bayIds: readonly string[];
+      readonly craftIds: readonly string[];
+      /** Maximum gaps that keep the stages together, and the links between them. */
+      readonly links: readonly Link[];
+    };
+
+/** Why a problem has no plan that keeps every requirement; null where no reason was found (which proves nothing). */
+export function findConflict(problem: Problem, budget: ConflictBudget): Conflict | null {
+  const path = criticalPath(problem);
+  if (path.kind === 'cycle') return path;
+  return tooLate(problem) ?? collision(problem, budget);
+}
+
+/** The chain that ends furthest past a limit, if any does. */
+function tooLate(problem: Problem): Conflict | null {
+  const network = timeNetwork(problem);
+  const { instants, parents } = earliestInstants(network);
+  let worst = -1;
+  let excess = 0;
+  for (let node = 0; node < instants.length; node++) {
+    const over = instants[node] - Math.min(network.notAfter[node], problem.horizon.end);
+    if (over > excess) {
+      worst = node;
+      excess = over;
+    }
+  }
+  if (worst < 0) return null;
+  const chain = chainTo(worst, parents);
+  const root = chain.length > 0 ? chain[0].from : worst;
+  const stage = network.stages[stageOfNode(worst)];
+  return {
+    kind: 'too-late',
+    steps: chain.map((arc) => ({ cause: arc.cause, lagMinutes: arc.lag ?? 0 })),
+    notBefore: instants[root],
+    firstStageId: network.stages[stageOfNode(root)].id,
+    stageId: stage.id,
+    ...limitAt(network, stage, worst, problem),
+    excessMinutes: excess,
+  };
+}
+
+function chainTo(node: number, parents: readonly (TimeArc | null)[]): TimeArc[] {
+  const chain: TimeArc[] = [];
+  for (let arc = parents[node]; arc !== null && chain.length <= parents.length; arc = parents[arc.from]) chain.push(arc);
+  return chain.reverse();
+}
+
+function limitAt(
+  network: TimeNetwork,
+  stage: Stage,
+  node: number,
+  problem: Problem,
+): { limit: LateLimit; notAfter: Minute } {
+  const notAfter = Math.min(network.notAfter[node], problem.horizon.end);
+  if (notAfter === problem.horizon.end && network.notAfter[node] >= notAfter) return { limit: 'horizon', notAfter };
+  if (stage.progress.kind !== 'to-do') return { limit: 'progress', notAfter };
+  if (node !== startNode(stageOfNode(node))) return { limit: 'latest', notAfter };
+  return { limit: stage.fixedStart === null ? 'pin' : 'fixed', notAfter };
+}
