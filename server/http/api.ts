@@ -25,7 +25,7 @@ export interface OpenCall<E extends Endpoint> extends Call<E> {
   readonly actor: Actor | null;
 }
 
-type Answer<E extends Endpoint> = z.input<E['response']>;
+type Answer<E extends Endpoint> = z.input<E['response']> extends undefined ? void : z.input<E['response']>;
 
 /**
  * The contract's routes as an Express router. What each route checks, in this order: who calls, that the call comes from our own
