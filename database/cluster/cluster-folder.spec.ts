@@ -1,4 +1,4 @@
-import { chmodSync, existsSync, mkdirSync, mkdtempSync, rmSync, statSync, symlinkSync } from 'node:fs';
+import { chmodSync, chownSync, existsSync, mkdirSync, mkdtempSync, rmSync, statSync, symlinkSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { claim, projectClusterFolder } from './cluster-folder';
@@ -10,6 +10,11 @@ describe('the folder of a project’s cluster', () => {
   let top: string;
   let owner: ClusterOwner;
   const data = () => join(top, 'project', '.fettle');
+  const outsider = () => {
+    const folder = mkdtempSync(join(top, 'outsider-'));
+    chownSync(folder, 12_345, 12_345);
+    return folder;
+  };
   const choose = () => projectClusterFolder(data(), owner, join(top, 'outside')).path;
   beforeEach(() => {
     owner = clusterOwner();
@@ -42,8 +47,17 @@ describe('the folder of a project’s cluster', () => {
     if (isRoot) chmodSync(join(top, 'project'), 0o700);
     const path = choose();
     mkdirSync(join(path, 'data'));
+    if (owner.kind === 'postgres') chownSync(join(path, 'data'), owner.uid, owner.gid);
     chmodSync(join(top, 'project'), 0o755);
     expect(choose()).toBe(path);
+  });
+
+  it('is not taken from another user', () => {
+    const folder = join(data(), 'cluster', 'data');
+    mkdirSync(join(data(), 'cluster'), { recursive: true });
+    // Only root can give files away; anybody else points at root's.
+    symlinkSync(isRoot ? outsider() : '/', folder);
+    expect(choose).toThrow('belongs to the user');
   });
 
   it('refuses a link that somebody has laid in its place', () => {

@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { chmodSync, chownSync, existsSync, lstatSync, mkdirSync } from 'node:fs';
+import { chmodSync, chownSync, existsSync, lstatSync, mkdirSync, statSync } from 'node:fs';
 import { join } from 'node:path';
 import { canEnter, type ClusterOwner } from './owner';
 import { Obstacle } from './obstacle';
@@ -47,8 +47,19 @@ export function projectClusterFolder(dataFolder: string, owner: ClusterOwner, ou
         'folders (chmod o+x on each) and start again.',
     );
   }
+  refuseForeign(chosen.data, owner);
   claim(chosen.path, owner);
   return chosen;
+}
+
+/** PostgreSQL serves only its owner's files; handing them over in silence would lock the first user out. */
+function refuseForeign(data: string, owner: ClusterOwner): void {
+  if (!existsSync(data)) return;
+  const { uid } = statSync(data);
+  if (uid === (owner.kind === 'postgres' ? owner.uid : process.getuid?.())) return;
+  throw new Obstacle(
+    `The database in ${data} belongs to the user with number ${String(uid)}: start Fettle as that user.`,
+  );
 }
 
 /** Makes a folder that belongs to the owner alone, and refuses one that somebody else has put there before. */

@@ -8,6 +8,7 @@ describe('readAddress', () => {
 
   it('takes port and host from the environment', () => {
     expect(readAddress({ PORT: '8080', HOST: '::1' }).url).toBe('http://[::1]:8080');
+    expect(readAddress({ HOST: '0.0.0.0' })).toMatchObject({ host: '0.0.0.0', url: 'http://127.0.0.1:4300' });
   });
 
   it.each(['0', '65536', '80.5', 'http', '-1'])('refuses %s as a port, naming it', (port) => {

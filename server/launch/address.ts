@@ -6,6 +6,7 @@ import { Obstacle } from '@database/cluster/obstacle';
 export interface Address {
   readonly host: string;
   readonly port: number;
+  /** What a browser on this machine is given. */
   readonly url: string;
 }
 
@@ -22,7 +23,9 @@ export function readAddress(env: Readonly<Record<string, string | undefined>>): 
     throw new Obstacle(`PORT is "${asked}", which is no port: give a whole number from 1 to 65535.`);
   }
   const host = env['HOST'] ?? LOOPBACK;
-  return { host, port, url: `http://${host.includes(':') ? `[${host}]` : host}:${String(port)}` };
+  // "Every interface" is no address to visit; from this machine loopback is.
+  const visited = host === '0.0.0.0' ? LOOPBACK : host === '::' ? '::1' : host;
+  return { host, port, url: `http://${visited.includes(':') ? `[${visited}]` : visited}:${String(port)}` };
 }
 
 /** Refuses early, before anything is built, a port that cannot be had. */

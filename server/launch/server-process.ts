@@ -16,7 +16,7 @@ const READY_LIMIT_MS = 60_000;
 // Longer than the server's own deadline for draining.
 const STOP_LIMIT_MS = 20_000;
 
-/** Starts the built server and waits until it answers at `url`. */
+/** Starts the built server and waits until it and its database answer at `url`. */
 export async function startBuiltServer(url: string, env: Readonly<Record<string, string>>): Promise<ServerProcess> {
   const child = spawn(
     process.execPath,
@@ -39,11 +39,12 @@ export async function startBuiltServer(url: string, env: Readonly<Record<string,
 async function untilAnswering(url: string): Promise<'ready' | 'silent'> {
   const deadline = Date.now() + READY_LIMIT_MS;
   while (Date.now() < deadline) {
-    const status = await fetch(url, { signal: AbortSignal.timeout(2_000) }).then(
-      (response) => response.status,
-      () => undefined,
+    const answer = fetch(`${url}/api/ready`, { signal: AbortSignal.timeout(2_000) });
+    const isReady = await answer.then(
+      (response) => response.ok,
+      () => false,
     );
-    if (status !== undefined && status < 500) return 'ready';
+    if (isReady) return 'ready';
     await pause(100);
   }
   return 'silent';

@@ -1,4 +1,3 @@
-import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { type Address } from './address';
 import { DATA_FOLDER, DIST } from './places';
@@ -9,13 +8,11 @@ import { keptSecret } from './secret';
  * except for where the database is.
  */
 export function serverSettings(address: Address, databaseUrl: string): Readonly<Record<string, string>> {
-  const files = join(DATA_FOLDER, 'files');
-  mkdirSync(files, { recursive: true, mode: 0o700 });
   const usual = {
     NODE_ENV: 'production',
-    PUBLIC_URL: address.url,
+    // The terminal belongs to the person who typed the command: only what needs them.
+    LOG_LEVEL: 'warn',
     SESSION_SECRET: keptSecret(DATA_FOLDER, 'session-secret'),
-    FILES_FOLDER: files,
     CLIENT_FOLDER: join(DIST, 'client', 'browser'),
   };
   const given = Object.fromEntries(Object.keys(usual).flatMap((name) => entry(name, process.env[name])));

@@ -41,7 +41,8 @@ async function serve(address: Address, end: Promise<'asked'>): Promise<void> {
   try {
     const welcome = await prepareDatabase(cluster.url);
     server = await startBuiltServer(address.url, serverSettings(address, cluster.url));
-    say(['', `Fettle is at ${address.url}`, ...welcome, 'Ctrl-C stops it; the data stays.', ''].join('\n'));
+    const stays = `Ctrl-C stops it; the data stays in ${cluster.path}.`;
+    say(['', `Fettle is at ${address.url}`, ...welcome, stays, ''].join('\n'));
     const outcome = await Promise.race([end, server.ended]);
     if (outcome !== 'asked') throw new Obstacle(`The server ended by itself (code ${String(outcome)}): see above.`);
     say('Stopping.');

@@ -8,10 +8,23 @@ export function say(sentence: string): void {
 /** Runs a launcher; an obstacle ends it with its one sentence, anything else with all that is known of it. */
 export function launch(main: () => Promise<void>): void {
   main().catch((error: unknown) => {
-    if (error instanceof Obstacle) say(error.message);
-    else console.error(error);
+    const sentence = obstacleIn(error);
+    if (sentence === undefined) console.error(error);
+    else say(sentence);
     process.exit(1);
   });
+}
+
+/** What stands in the way, in one sentence, where an error is the machine's and not the program's. */
+export function obstacleIn(error: unknown): string | undefined {
+  if (error instanceof Obstacle) return error.message;
+  if (typeof error !== 'object' || error === null || !('code' in error)) return undefined;
+  const { code, path = 'The project' } = error as NodeJS.ErrnoException;
+  if (code === 'EACCES' || code === 'EPERM' || code === 'EROFS') {
+    return `${path} may not be written by this user: run the command as the user who made it, or give it to this one.`;
+  }
+  if (code === 'ENOSPC') return `The disk is full: make room and run the command again.`;
+  return undefined;
 }
 
 /**
