@@ -1,6 +1,6 @@
 import { existsSync } from 'node:fs';
-import { join, resolve } from 'node:path';
 import { budgetOption, readArguments, UsageFault, wholeOption, type Arguments } from './arguments';
+import { sharedInstances } from './shared-data';
 import { suites } from './suites/suites';
 import type { SuiteOptions } from './suites/suite';
 
@@ -27,20 +27,13 @@ function suiteOptions(given: Arguments): SuiteOptions {
   if (asked !== undefined && !existsSync(asked)) throw new UsageFault(`The folder ${asked} does not exist.`);
   const hasBudget = given.options.has('seconds') || given.options.has('schedules');
   return {
-    dataDirectory: asked ?? usualData(),
+    dataDirectory: asked ?? sharedInstances(),
     set: given.options.get('set') ?? null,
     budget: hasBudget ? budgetOption(given, { kind: 'seconds', seconds: 1 }) : null,
     seed: wholeOption(given, 'seed', 1, 0),
     limit: wholeOption(given, 'limit', Number.MAX_SAFE_INTEGER, 1),
     say: (text) => console.error(text),
   };
-}
-
-/** The instances beside the project, or where FETTLE_SHARED says; null where there are none. */
-function usualData(): string | null {
-  const shared = process.env['FETTLE_SHARED'] ?? resolve(__dirname, '../../../shared');
-  const path = join(shared, 'reference', 'scheduling');
-  return existsSync(path) ? path : null;
 }
 
 function listOfSuites(): string {

@@ -21,7 +21,7 @@ export function collision(problem: Problem, budget: ConflictBudget): Conflict | 
   let kept = allParts(problem);
   if (!isProved(kept)) return null;
   for (let size = Math.ceil(kept.length / 2); ; size = Math.ceil(size / 2)) {
-    for (let at = 0; at < kept.length && !budget.shouldStop(); ) {
+    for (let at = 0; at < kept.length && !budget.shouldStop();) {
       const rest = [...kept.slice(0, at), ...kept.slice(at + size)];
       if (isProved(rest)) kept = rest;
       else at += size;
@@ -57,7 +57,8 @@ function allParts(problem: Problem): Part[] {
  * nothing; a bay or craft left out is asked for by nobody.
  */
 function reduced(problem: Problem, parts: readonly Part[]): Problem {
-  const ids = (kind: Part['kind']): Set<string> => new Set(parts.flatMap((part) => (part.kind === kind && 'id' in part ? [part.id] : [])));
+  const ids = (kind: Part['kind']): Set<string> =>
+    new Set(parts.flatMap((part) => (part.kind === kind && 'id' in part ? [part.id] : [])));
   const stages = ids('stage');
   const bays = ids('bay');
   const crafts = ids('craft');

@@ -82,7 +82,8 @@ function tooLate(problem: Problem): Conflict | null {
 
 function chainTo(node: number, parents: readonly (TimeArc | null)[]): TimeArc[] {
   const chain: TimeArc[] = [];
-  for (let arc = parents[node]; arc !== null && chain.length <= parents.length; arc = parents[arc.from]) chain.push(arc);
+  for (let arc = parents[node]; arc !== null && chain.length <= parents.length; arc = parents[arc.from])
+    chain.push(arc);
   return chain.reverse();
 }
 
