@@ -1,8 +1,20 @@
 import type { FeatureParts } from './app';
+import { Bays, mountBays } from './bays';
+import { Crafts, Leaves, Makers, mountCrew } from './crew';
+import { Materials, mountLibrary, Recipes } from './library';
 import { Accounts, mountSession } from './session';
+import { mountStudio, StudioService } from './studio';
 
 /** Every feature's routes, made and mounted. */
 export function mountFeatures(parts: FeatureParts): void {
   const { api, transactions } = parts;
   mountSession(api, { ...parts, accounts: new Accounts(transactions) });
+  mountStudio(api, new StudioService(transactions));
+  mountCrew(api, {
+    crafts: new Crafts(transactions),
+    makers: new Makers(transactions),
+    leaves: new Leaves(transactions),
+  });
+  mountBays(api, new Bays(transactions));
+  mountLibrary(api, { materials: new Materials(transactions), recipes: new Recipes(transactions) });
 }

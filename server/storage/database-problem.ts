@@ -69,7 +69,7 @@ export function databaseProblem(error: unknown): Problem | null {
     case EXCLUSION_VIOLATION:
       return new Problem('already-exists', 'There is one of these already.');
     case FOREIGN_KEY_VIOLATION:
-      return detail?.includes('is still referenced') || detail?.includes('is not present') === false
+      return detail?.includes('is still referenced')
         ? new Problem('still-in-use', 'Something else still uses this; change that first.')
         : new Problem('invalid-input', 'This refers to something that is not there.');
     case CHECK_VIOLATION:

@@ -1,0 +1,3 @@
+/** The public file of the bays. */
+export { Bays } from './bays';
+export { mountBays } from './bay-routes';

@@ -1,0 +1,105 @@
+import type { z } from 'zod';
+import type { FieldFault, StageDraft } from '@common/contract';
+import { stageFaults } from '@common/domain/stage-rules';
+import type { DraftColumns } from '@database/entities';
+
+type Draft = z.output<typeof StageDraft>;
+type DraftRow = Pick<
+  DraftColumns,
+  | 'name'
+  | 'kind'
+  | 'lowMinutes'
+  | 'likelyMinutes'
+  | 'highMinutes'
+  | 'crewLossPermille'
+  | 'continuity'
+  | 'dwellMinutes'
+  | 'dwellAttendedMinutes'
+  | 'dwellMaterialId'
+  | 'dwellMilestone'
+  | 'dwellWindow'
+  | 'cautions'
+  | 'note'
+  | 'visitAt'
+  | 'replyMinutes'
+>;
+
+/** The columns of a draft; its crew and places are rows of their own. */
+export function draftRow(draft: Draft): DraftRow {
+  const { dwell, handsOn } = draft;
+  return {
+    name: draft.name,
+    kind: draft.kind,
+    ...handsOn,
+    crewLossPermille: draft.crewLossPermille,
+    continuity: draft.continuity,
+    dwellMinutes: dwell?.minutes ?? null,
+    dwellAttendedMinutes: dwell?.attendedMinutes ?? null,
+    dwellMaterialId: dwell?.materialId ?? null,
+    dwellMilestone: dwell?.milestone ?? null,
+    dwellWindow: dwell?.window ?? null,
+    cautions: draft.cautions,
+    note: draft.note,
+    visitAt: draft.visitAt === null ? null : new Date(draft.visitAt),
+    replyMinutes: draft.replyMinutes,
+  };
+}
+
+/** The draft that a row's columns say. */
+export function draftOf(row: DraftRow): Omit<Draft, 'crew' | 'places'> {
+  const { lowMinutes, likelyMinutes, highMinutes } = row;
+  return {
+    name: row.name,
+    kind: row.kind,
+    handsOn: { lowMinutes, likelyMinutes, highMinutes },
+    crewLossPermille: row.crewLossPermille,
+    continuity: row.continuity,
+    dwell:
+      row.dwellMinutes === null
+        ? null
+        : {
+            materialId: row.dwellMaterialId,
+            milestone: row.dwellMilestone,
+            minutes: row.dwellMinutes,
+            attendedMinutes: row.dwellAttendedMinutes ?? 0,
+            window: row.dwellWindow,
+          },
+    cautions: row.cautions,
+    note: row.note,
+    visitAt: row.visitAt?.toISOString() ?? null,
+    replyMinutes: row.replyMinutes,
+  };
+}
+
+/** The records that a draft may refer to. */
+export interface KnownRecords {
+  readonly craftIds: ReadonlySet<string>;
+  readonly bayIds: ReadonlySet<string>;
+  readonly materialIds: ReadonlySet<string>;
+}
+
+/** Everything wrong with a draft beyond the shape of its fields: the trade's own rules, and references to nothing. */
+export function draftFaults(draft: Draft, known: KnownRecords, pointer = ''): FieldFault[] {
+  const faults: FieldFault[] = stageFaults(draft).map((fault) => ({
+    pointer: `${pointer}${fault.pointer}`,
+    detail: fault.sentence,
+  }));
+  draft.crew.forEach(({ craftId }, i) => {
+    if (!known.craftIds.has(craftId)) {
+      faults.push({ pointer: `${pointer}/crew/${String(i)}/craftId`, detail: 'There is no such craft.' });
+    }
+  });
+  draft.places.forEach(({ bayIds }, i) =>
+    bayIds.forEach((bayId, j) => {
+      if (!known.bayIds.has(bayId)) {
+        const at = `${pointer}/places/${String(i)}/bayIds/${String(j)}`;
+        faults.push({ pointer: at, detail: 'There is no such bay.' });
+      }
+    }),
+  );
+  const materialId = draft.dwell?.materialId ?? null;
+  if (materialId !== null && !known.materialIds.has(materialId)) {
+    faults.push({ pointer: `${pointer}/dwell/materialId`, detail: 'There is no such material.' });
+  }
+  return faults;
+}
