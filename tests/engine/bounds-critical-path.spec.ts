@@ -116,8 +116,6 @@ describe('the critical path', () => {
 });
 
 const shared = sharedInstancesFor('published critical paths');
-if (shared === null)
-  console.info('The published instances are not on this machine; their critical paths are not checked.');
 (shared === null ? describe.skip : describe)('published critical paths', () => {
   // PSPLIB (Kolisch & Sprecher 1996): the MPM-Time of each file's header.
   it.each(['j30', 'j60', 'j120'])('%s', (set) => {

@@ -229,7 +229,6 @@ const sets = [
   ['multi-skill/set-2a', 110, null],
 ] as const;
 
-if (shared === null) console.info('The published instances are not on this machine; reading them is skipped.');
 (shared === null ? describe.skip : describe)('published sets', () => {
   it.each(sets)('%s is read whole', (set, files, activities) => {
     const directory = join(shared ?? '', set);
