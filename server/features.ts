@@ -1,6 +1,7 @@
 import type { FeatureParts } from './app';
 import { Bays, mountBays } from './bays';
 import { Crafts, Leaves, Makers, mountCrew } from './crew';
+import { mountFeeds } from './feeds';
 import { Materials, mountLibrary, Recipes } from './library';
 import { Accounts, mountSession } from './session';
 import { mountStudio, StudioService } from './studio';
@@ -17,4 +18,5 @@ export function mountFeatures(parts: FeatureParts): void {
   });
   mountBays(api, new Bays(transactions));
   mountLibrary(api, { materials: new Materials(transactions), recipes: new Recipes(transactions) });
+  mountFeeds({ ...parts, publicUrl: parts.config.publicUrl });
 }

@@ -9,6 +9,7 @@ export const PROBLEM_KINDS = {
   'not-allowed': { status: 403, title: 'Your role does not allow this' },
   'stale-form': { status: 403, title: 'The page is out of date; reload it and try again' },
   'not-found': { status: 404, title: 'There is nothing here' },
+  gone: { status: 410, title: 'This was closed for good' },
   'wrong-method': { status: 405, title: 'This address does not answer that method' },
   'version-conflict': { status: 409, title: 'Someone else changed this meanwhile' },
   'already-exists': { status: 409, title: 'There is one already' },

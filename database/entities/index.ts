@@ -5,6 +5,7 @@ import { BayOpening } from './bay-opening';
 import { Client } from './client';
 import { Closure } from './closure';
 import { Craft } from './craft';
+import { FeedState } from './feed-state';
 import { FeedToken } from './feed-token';
 import { IssuedEntry } from './issued-entry';
 import { IssuedOccupancy } from './issued-occupancy';
@@ -47,6 +48,7 @@ export * from './client';
 export * from './closure';
 export * from './craft';
 export * from './draft-columns';
+export * from './feed-state';
 export * from './feed-token';
 export * from './issued-entry';
 export * from './issued-occupancy';
@@ -91,6 +93,7 @@ export const entities = [
   Client,
   Closure,
   Craft,
+  FeedState,
   FeedToken,
   IssuedEntry,
   IssuedOccupancy,

@@ -2,6 +2,7 @@ import { CrewAndClients1764547201000 } from './1764547201000-crew-and-clients';
 import { AccountsAndAudit1764547202000 } from './1764547202000-accounts-and-audit';
 import { WorkToBeDone1764547203000 } from './1764547203000-work-to-be-done';
 import { StudioAndPlans1764547204000 } from './1764547204000-studio-and-plans';
+import { FeedState1764547205000 } from './1764547205000-feed-state';
 
 /** Every migration in its order, listed by hand: a glob would not survive bundling. */
 export const migrations = [
@@ -9,4 +10,5 @@ export const migrations = [
   AccountsAndAudit1764547202000,
   WorkToBeDone1764547203000,
   StudioAndPlans1764547204000,
+  FeedState1764547205000,
 ] as const;

@@ -4,7 +4,7 @@ import type { FeedScope } from '@common/contract/feeds';
 import type { Placement } from '@common/planning/problem/plan';
 import { instantOfLocal } from '@common/time/zone';
 import { calendarText } from './calendar-text';
-import { calendarFaults, readComponents, valueOf, type CalendarComponent } from './check-calendar';
+import { calendarFaults, readComponents, valueOf, type CalendarComponent } from './testing/check-calendar';
 import { EMPTY_HISTORY, type FeedHistory, withView } from './feed-history';
 import type { IssuedNames, IssuedStage, IssuedView } from './issued-view';
 
@@ -154,7 +154,7 @@ describe('calendarText', () => {
     ['a production', DRAGON],
     ['the studio', STUDIO],
   ] as const)('keeps the rules of RFC 5545 for %s', (_, scope) => {
-    // Source: RFC 5545 sections 3.1, 3.3, 3.6, 3.8 and RFC 7986 section 5, as told in check-calendar.ts.
+    // Source: RFC 5545 sections 3.1, 3.3, 3.6, 3.8 and RFC 7986 section 5, as told in testing/check-calendar.ts.
     expect(calendarFaults(Buffer.from(textOf(scope, shown(scope, FIRST))))).toEqual([]);
   });
 

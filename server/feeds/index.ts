@@ -1,0 +1,2 @@
+/** The public file of calendars. */
+export { mountFeeds } from './feed-routes';
