@@ -44,7 +44,7 @@ export function isMark(mark: string): boolean {
  * any two letters. Upper case for the first letter only.
  */
 export function suggestMark(name: string, taken: readonly string[]): string {
-  const words = name.match(/\p{L}+/gu) ?? [];
+  const words: readonly string[] = name.match(/\p{L}+/gu) ?? [];
   const letters = words.join('');
   const initials = words.length > 1 ? [words[0][0] + words[1][0]] : [];
   const fromName = [...letters.slice(1)].map((letter) => letters[0] + letter);

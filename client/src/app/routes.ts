@@ -1,6 +1,6 @@
 import { inject } from '@angular/core';
 import { Router, type Routes } from '@angular/router';
-import { OFFICE } from '@common/contract';
+import { OFFICE, WORKSHOP } from '@common/contract';
 import { homeOf, onlyFor, SessionStore, signedIn, signedOut } from './session';
 import { NotFoundPage } from './shell/not-found-page';
 import { Shell } from './shell/shell';
@@ -16,6 +16,12 @@ const pages: Routes = [
   { path: 'plan', title: 'Plan', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./plan') },
   { path: 'dates', title: 'Dates', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./dates') },
   { path: 'load', title: 'Load', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./load') },
+  {
+    path: 'productions',
+    title: 'Productions',
+    canActivate: [onlyFor(WORKSHOP)],
+    loadChildren: () => import('./productions'),
+  },
 ];
 
 /** Every address of the application. */

@@ -1,13 +1,5 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-
-/** How many hues productions share out; the theme writes `--hue-0` to `--hue-11`. */
-export const HUE_COUNT = 12;
-
-/** The CSS colour of a production's hue: itself, the text that stands on it, or a tint to read ink on. */
-export function hueColour(hue: number, part: 'fill' | 'on' | 'wash' = 'fill'): string {
-  const index = ((Math.trunc(hue) % HUE_COUNT) + HUE_COUNT) % HUE_COUNT;
-  return `var(--hue-${index}${part === 'fill' ? '' : `-${part}`})`;
-}
+import { hueColour } from './production-hues';
 
 /** A production's two letters on its hue. Decorative where the production's name stands beside it. */
 @Component({
@@ -40,7 +32,7 @@ export function hueColour(hue: number, part: 'fill' | 'on' | 'wash' = 'fill'): s
 export class MarkChip {
   /** Two letters. */
   readonly mark = input.required<string>();
-  /** 0 to 11. */
+  /** The production's hue, counted from 0. */
   readonly hue = input.required<number>();
   /** The production's name, where it does not stand beside the chip. */
   readonly name = input('');

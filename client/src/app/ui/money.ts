@@ -1,4 +1,5 @@
 import { inject, InjectionToken, Pipe, type PipeTransform, type Signal, signal } from '@angular/core';
+import { formatMoney } from '@common/domain/money';
 
 /** The studio's currency, ISO 4217. */
 export const STUDIO_CURRENCY = new InjectionToken<Signal<string>>('studio currency', {
@@ -18,8 +19,7 @@ export class MoneyPipe implements PipeTransform {
   private readonly currency = inject(STUDIO_CURRENCY);
 
   transform(minor: number): string {
-    const currency = this.currency();
-    return new Intl.NumberFormat('en-GB', { style: 'currency', currency }).format(minor / minorUnits(currency));
+    return formatMoney(minor, this.currency());
   }
 }
 

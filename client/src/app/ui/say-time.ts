@@ -1,9 +1,8 @@
 import type { Instant } from '@common/contract';
-import { addDays, type DayRange, weekdayOf } from '@common/time/calendar-day';
+import { addDays, dayFromNumber, dayNumber, type DayRange, weekdayOf } from '@common/time/calendar-day';
 import { formatDay, formatDayAndTime } from '@common/time/format-instant';
 import { isLocalTime, minuteOfDay } from '@common/time/local-time';
 import { instantOfLocal, localOfInstant, MINUTES_PER_DAY } from '@common/time/zone';
-import { dayFromNumber, dayNumber } from '@common/time/calendar-day';
 
 const MS_PER_MINUTE = 60_000;
 
@@ -68,6 +67,28 @@ export function readHours(text: string): number | null {
 export function writeHours(minutes: number): string {
   const rest = minutes % 60;
   return rest === 0 ? String(minutes / 60) : `${Math.floor(minutes / 60)}:${String(rest).padStart(2, '0')}`;
+}
+
+const MINUTES_IN = { d: MINUTES_PER_DAY, h: 60, min: 1 } as const;
+
+/** A length of time by the clock as a person types it, "2 d 4 h", "36 h", "90 min", "36" for hours; null where it can't be read. */
+export function readClockTime(text: string): number | null {
+  const plain = text.trim().toLowerCase().replaceAll(',', '.');
+  const parts = [...plain.matchAll(/(\d{1,5}(?:\.\d{1,3})?)\s*(min|m|h|d)(?![a-z])/g)];
+  const rest = plain.replace(/\d{1,5}(?:\.\d{1,3})?\s*(?:min|m|h|d)(?![a-z])/g, '').trim();
+  if (parts.length === 0 || rest !== '') {
+    return readHours(text);
+  }
+  const minutes = parts.map(([, figure, unit]) => Number(figure) * MINUTES_IN[unit === 'm' ? 'min' : (unit as 'd')]);
+  return Math.round(minutes.reduce((sum, part) => sum + part, 0));
+}
+
+/** A length of time exact to the minute, as `readClockTime` reads it back: "1 d 12 h". */
+export function writeClockTime(minutes: number): string {
+  const days = Math.floor(minutes / MINUTES_PER_DAY);
+  const hours = Math.floor((minutes % MINUTES_PER_DAY) / 60);
+  const parts = [days && `${days} d`, hours && `${hours} h`, minutes % 60 && `${minutes % 60} min`];
+  return parts.filter(Boolean).join(' ') || '0 min';
 }
 
 /** The day and the clock reading of an instant in a zone, for a form. */
