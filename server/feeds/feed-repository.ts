@@ -8,7 +8,7 @@ import {
   IssuedPlan,
   KeyDate,
   Maker,
-  Piece,
+  type Piece,
   Production,
   Stage,
   Studio,
