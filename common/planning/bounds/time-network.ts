@@ -1,6 +1,7 @@
 import type { Minute } from '../../time/span';
 import type { Link } from '../problem/link';
 import type { Problem, Stage } from '../problem/problem';
+import { PossibleHours } from './availability';
 import { dwellReach } from './dwell-reach';
 import { workReach, type WorkReach } from './work-reach';
 import { WorkingMeasure } from './working-measure';
@@ -48,7 +49,8 @@ export const stageOfNode = (node: number): number => Math.floor(node / 3);
 
 /** Builds the network of a problem; links to stages that do not exist are left out. */
 export function timeNetwork(problem: Problem): TimeNetwork {
-  const works = problem.stages.map((stage) => workReach(problem, stage));
+  const possible = new PossibleHours(problem);
+  const works = problem.stages.map((stage) => workReach(problem, stage, possible));
   const positions = new Map(problem.stages.map((stage, k) => [stage.id, k]));
   const measure = new WorkingMeasure(problem.workingTime);
   const arcs: TimeArc[] = [];

@@ -1,7 +1,6 @@
 import type { Minute } from '../../time/span';
 import type { CrewNeed, Problem, Stage } from '../problem/problem';
-import { possibleHours } from './availability';
-import { WorkingMeasure } from './working-measure';
+import type { PossibleHours } from './availability';
 
 /** How long the work of a stage takes at least, and between which instants, whoever does it. All parts are monotone. */
 export interface WorkReach {
@@ -18,15 +17,14 @@ export interface WorkReach {
 }
 
 /** The reach of a stage's work that has yet to be done. */
-export function workReach(problem: Problem, stage: Stage): WorkReach {
+export function workReach(problem: Problem, stage: Stage, possible: PossibleHours): WorkReach {
   const minutes = leastWorkMinutes(problem, stage);
-  const hours = stage.continuity === 'clock' ? null : possibleHours(problem, stage.crew, stage.places);
+  const measure = stage.continuity === 'clock' ? null : possible.of(stage.crew, stage.places);
   const isFixed = stage.effort.kind === 'duration';
-  if (hours === null || minutes === 0) {
+  if (measure === null || minutes === 0) {
     const isExact = isFixed && (stage.continuity === 'clock' || stage.continuity === 'session' || minutes === 0);
     return { minutes, isExact, begin: (from) => from, reach: (from) => from + minutes, retreat: (to) => to - minutes };
   }
-  const measure = new WorkingMeasure(hours);
   if (stage.continuity === 'session')
     return {
       minutes,
