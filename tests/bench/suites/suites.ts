@@ -1,4 +1,7 @@
+import { dragSuite } from './drag-suite';
 import { instanceSuite } from './instance-suite';
+import { levellingSuite } from './levelling-suite';
+import { studioSuite } from './studio-suite';
 import type { Suite } from './suite';
 
 /** Every benchmark by the name that the command line calls it. A new suite is a file beside this one and a line here. */
@@ -39,4 +42,7 @@ export const suites: ReadonlyMap<string, Suite> = new Map<string, Suite>([
       usualBudget: { kind: 'seconds', seconds: 2 },
     }),
   ],
+  ['levelling', levellingSuite],
+  ['studio', studioSuite],
+  ['drag', dragSuite],
 ]);
