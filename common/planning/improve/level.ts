@@ -1,7 +1,49 @@
+import { check } from '../check/check';
+import { compile } from '../construct/compile';
+import { estimate } from '../construct/estimate';
+import { toPlan } from '../construct/to-plan';
+import { measure } from '../objective/objective';
+import type { Plan } from '../problem/plan';
 import type { Problem } from '../problem/problem';
-import type { LevelResult } from '../problem/result';
+import type { LevelResult, Objective } from '../problem/result';
+import { Budget } from '../stop/budget';
+import { evenOut } from './even-out';
 import type { LevelOptions } from './level-options';
+import { StudioSearch } from './search-studio';
 
-export function level(_problem: Problem, _options: LevelOptions): LevelResult {
-  throw new Error('Not written yet.');
+/** The share of schedules after which evenness is sought in what is left. */
+const EVEN_SHARE = 0.9;
+
+/**
+ * Lays all stages out so that capacity is kept, dates are met and load is even, as well as the budget allows; improves until told
+ * to stop. What the plan could not meet stands in `unmet`, in the checker's words. Throws only on a problem without meaning.
+ */
+export function level(problem: Problem, options: LevelOptions): LevelResult {
+  const compiled = compile(problem);
+  const searchBudget = new Budget(Math.max(1, Math.floor(options.maxSchedules * EVEN_SHARE)), options.shouldStop);
+  const tell = (): void => {
+    if (!options.onProgress) return;
+    const plan = toPlan(search.generator.layout);
+    const objective = measure(problem, plan, []);
+    options.onProgress({ schedules: searchBudget.schedules, objective: { ...objective, unplaced: search.bestScore[0] }, bound: noBound() });
+  };
+  const search = new StudioSearch(compiled, estimate(compiled), searchBudget, options.seed, tell);
+  search.construct();
+  search.improve();
+  search.layOutBest();
+  const budget = new Budget(Math.max(0, options.maxSchedules - searchBudget.schedules), options.shouldStop);
+  evenOut(search.generator.layout, budget);
+  const plan = toPlan(search.generator.layout);
+  return finish(problem, plan, searchBudget.schedules + budget.schedules, searchBudget.stop);
+}
+
+/** Measures and checks a plan into a result. */
+export function finish(problem: Problem, plan: Plan, schedules: number, stop: LevelResult['stop']): LevelResult {
+  const unmet = check(problem, plan);
+  return { plan, objective: measure(problem, plan, unmet), bound: noBound(), unmet, schedules, stop };
+}
+
+/** No part bounded. */
+export function noBound(): { [Part in keyof Objective]: number | null } {
+  return { unplaced: null, hardLateness: null, wishedLateness: null, costMinor: null, unevenness: null, changes: null, finishSum: null };
 }

@@ -25,6 +25,7 @@ export type Reason =
     }
   | { readonly kind: 'crew-off-shift'; readonly craftId: string; readonly until: Minute }
   | { readonly kind: 'too-long-for-shift'; readonly until: Minute }
+  | { readonly kind: 'held-for-window'; readonly stageId: string; readonly until: Minute }
   | { readonly kind: 'kept-for-evenness'; readonly until: Minute };
 
 /** A stage and the reasons for its start, the one that binds last (the latest `until`) first. */

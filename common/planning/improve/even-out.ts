@@ -1,0 +1,185 @@
+import { StageBounds } from '../construct/bounds-of-stage';
+import { NEVER } from '../construct/calendar';
+import { type Ask, Fitter } from '../construct/fitter';
+import { copyFit, type Fit, type Layout, newFit } from '../construct/layout';
+import { workMinutes } from '../construct/work-minutes';
+import type { Budget } from '../stop/budget';
+import { DayLoad } from './day-load';
+
+/** A stage is not tried on more days than this in one pass. */
+const MOST_DAYS = 60;
+/** The share of a date's margin that evenness may spend. */
+const MARGIN_SHARE = 0.5;
+/** Passes without a gain before it is left alone. */
+const PATIENCE = 4;
+
+/**
+ * Evens the daily load of each craft by moving one stage at a time within the room that links, dates, crews and bays leave it:
+ * the levelling of Burgess & Killebrew 1962, last stage first, and then first stage first, until nothing is gained. No date gets
+ * later than it is or may be, no window is missed that was met, and nothing costs more.
+ */
+export function evenOut(layout: Layout, budget: Budget): void {
+  const { compiled } = layout;
+  if (compiled.problem.weights.unevenness === 0) return;
+  const evener = new Evener(layout);
+  let idle = 0;
+  for (let pass = 0; idle < PATIENCE && !budget.isSpent(); pass += 1) {
+    budget.spend();
+    idle = evener.pass(pass % 2 === 0, () => budget.isSpent()) ? 0 : idle + 1;
+  }
+}
+
+class Evener {
+  private readonly load: DayLoad;
+  private readonly fitter: Fitter;
+  private readonly bounds: StageBounds;
+  private readonly trial: Fit = newFit();
+  private readonly best: Fit = newFit();
+  private readonly dateLimit: Float64Array;
+
+  constructor(private readonly layout: Layout) {
+    this.load = new DayLoad(layout);
+    this.fitter = new Fitter(layout);
+    this.bounds = new StageBounds(layout, this.fitter);
+    this.dateLimit = this.dateLimits();
+  }
+
+  /** One pass over all movable stages; true where the sum got less. Even sums go to the later day or to the earlier. */
+  pass(lastFirst: boolean, isSpent: () => boolean): boolean {
+    const before = this.load.sum;
+    const { layout } = this;
+    const { fixity } = layout.compiled.work;
+    const stages = [...layout.start.keys()].filter((stage) => fixity[stage] === 0 && layout.isPlaced[stage] === 1);
+    stages.sort((a, b) => (lastFirst ? layout.start[b] - layout.start[a] : layout.start[a] - layout.start[b]) || a - b);
+    for (const stage of stages) {
+      if (isSpent()) break;
+      if (layout.spanCount[stage] > 0 && layout.crew[stage]) this.moveToBest(stage, lastFirst);
+    }
+    return this.load.sum < before;
+  }
+
+  private moveToBest(stage: number, preferLate: boolean): void {
+    const { layout, load, trial, best } = this;
+    const crew = layout.crew[stage];
+    const housing = layout.housing[stage];
+    const isOvertime = this.worksOvertime(stage);
+    const was = this.remember(stage);
+    load.add(stage, -1);
+    layout.unplace(stage);
+    const ask = this.askFor(stage, was);
+    copyFit(was, best);
+    let bestSum = NEVER;
+    if (ask && crew && !isOvertime) {
+      ask.crew = crew;
+      ask.housing = housing;
+      const stay = this.sumWith(stage, was);
+      bestSum = stay;
+      for (let tries = 0; tries < MOST_DAYS && ask.lowStart <= ask.lastStart; tries += 1) {
+        if (!this.fitter.fit(ask, trial) || !this.isAllowed(trial, stage)) break;
+        const sum = this.sumWith(stage, trial);
+        const isTieKept = sum === bestSum && (preferLate ? trial.start > best.start : trial.start < best.start);
+        if (sum < bestSum || isTieKept) {
+          bestSum = sum;
+          copyFit(trial, best);
+        }
+        ask.lowStart = load.nextDayStart(trial.start);
+      }
+    }
+    layout.place(stage, best, crew, housing);
+    load.add(stage, 1);
+  }
+
+  /** What may be asked for the stage in its present mode; null where it has missed a window or breaks a bound and is left alone. */
+  private askFor(stage: number, was: Fit): Ask | null {
+    const { bounds, layout } = this;
+    bounds.gather(stage, 0);
+    if (bounds.softUntil.some((until) => was.start > until)) return null;
+    bounds.hardenWindows();
+    const isAmiss = was.start < bounds.lowStart || was.end < bounds.lowEnd || was.finish < bounds.lowFinish || !this.isAllowed(was, stage);
+    if (isAmiss) return null;
+    const minutes = workMinutes(layout.compiled, stage, layout.compiled.work.minutes[stage], layout.crew[stage]);
+    return {
+      stage, crew: null, housing: null, minutes, overtime: false,
+      lowStart: bounds.lowStart, lowEnd: bounds.lowEnd, lowFinish: bounds.lowFinish, lastStart: bounds.highStart,
+    };
+  }
+
+  private isAllowed(fit: Fit, stage: number): boolean {
+    const { bounds } = this;
+    return (
+      fit.start <= bounds.highStart &&
+      fit.end <= bounds.highEnd &&
+      fit.finish <= bounds.highFinish &&
+      fit.finish <= this.dateLimit[stage]
+    );
+  }
+
+  private sumWith(stage: number, fit: Fit): number {
+    const { compiled } = this.layout;
+    const crafts = this.layout.crew[stage]?.crafts;
+    this.load.addSpans(compiled, crafts, fit.spans, 0, fit.spanCount, 1);
+    const { sum } = this.load;
+    this.load.addSpans(compiled, crafts, fit.spans, 0, fit.spanCount, -1);
+    return sum;
+  }
+
+  private remember(stage: number): Fit {
+    const { layout } = this;
+    const fit = newFit();
+    fit.start = layout.start[stage];
+    fit.end = layout.end[stage];
+    fit.finish = layout.finish[stage];
+    fit.spanCount = layout.spanCount[stage];
+    fit.spans = layout.spanPool.slice(layout.spanAt[stage], layout.spanAt[stage] + 2 * fit.spanCount);
+    return fit;
+  }
+
+  private worksOvertime(stage: number): boolean {
+    const { layout } = this;
+    for (const maker of layout.crew[stage]?.makers ?? []) {
+      for (let k = layout.spanAt[stage], left = layout.spanCount[stage]; left > 0; k += 2, left -= 1) {
+        if (!layout.compiled.makers.ordinary[maker].covers(layout.spanPool[k], layout.spanPool[k + 1])) return true;
+      }
+    }
+    return false;
+  }
+
+  /**
+   * The latest that each stage's dwell may end: no date gets later than it is, and of its margin at most a part is spent, because
+   * an even plan that ends on the last day is a plan that will be late. What no date waits for stays within its production's end.
+   */
+  private dateLimits(): Float64Array {
+    const { layout } = this;
+    const { dates, stageCount } = layout.compiled;
+    const productionEnd = new Float64Array(dates.productionCount);
+    for (let stage = 0; stage < stageCount; stage += 1) {
+      const production = dates.productionOf[stage];
+      if (layout.isPlaced[stage] === 1) productionEnd[production] = Math.max(productionEnd[production], layout.finish[stage]);
+    }
+    const limit = new Float64Array(stageCount).fill(Infinity);
+    for (let date = 0; date < dates.count; date += 1) {
+      let finish = -Infinity;
+      for (const stage of dates.stages[date]) finish = Math.max(finish, layout.finish[stage]);
+      const latest = finish + Math.max(0, Math.floor((dates.at[date] - finish) * MARGIN_SHARE));
+      for (const stage of dates.stages[date]) limit[stage] = Math.min(limit[stage], latest);
+    }
+    for (let stage = 0; stage < stageCount; stage += 1) {
+      if (limit[stage] === Infinity) limit[stage] = Math.max(productionEnd[dates.productionOf[stage]], layout.finish[stage]);
+    }
+    // A stage before a date's own may end as late as links allow: its followers hold it back.
+    return this.widenBeforeDates(limit);
+  }
+
+  private widenBeforeDates(limit: Float64Array): Float64Array {
+    const { links, stageCount } = this.layout.compiled;
+    for (let round = 0, changed = true; changed && round < stageCount; round += 1) {
+      changed = false;
+      for (let link = 0; link < links.count; link += 1) {
+        if (limit[links.to[link]] <= limit[links.from[link]]) continue;
+        limit[links.from[link]] = limit[links.to[link]];
+        changed = true;
+      }
+    }
+    return limit;
+  }
+}
