@@ -60,7 +60,10 @@ class FinishBounds {
     private readonly network: TimeNetwork,
     private readonly heads: Float64Array,
   ) {
-    this.sources = energySources(problem);
+    this.sources = energySources(
+      problem,
+      network.works.map((work) => work.minutes),
+    );
     this.entering = network.notBefore.map(() => []);
     for (const arc of network.arcs) if (arc.lag !== null) this.entering[arc.to].push(arc);
   }
@@ -93,21 +96,24 @@ class FinishBounds {
   }
 
   private byEnergy(source: EnergySource, tails: Float64Array): Minute {
-    const users = source.demands.flatMap((demand, k) => (demand > 0 && tails[k] > -Infinity ? [k] : []));
-    if (users.length === 0) return -Infinity;
-    const head = (k: number): number => Math.max(this.heads[startNode(k)], this.problem.horizon.start);
-    const byTail = [...users].sort((a, b) => tails[b] - tails[a]);
+    const users = source.uses
+      .filter((use) => tails[use.stage] > -Infinity)
+      .map(({ stage, amount }) => ({ amount, tail: tails[stage], head: this.headOf(stage) }))
+      .sort((a, b) => b.tail - a.tail);
     let best = -Infinity;
-    for (const from of limits(users.map(head))) {
+    for (const from of limits(users.map((user) => user.head))) {
       let amount = 0;
-      byTail.forEach((k, position) => {
-        if (head(k) >= from) amount += source.demands[k];
-        const next = byTail[position + 1];
-        if (amount === 0 || (next !== undefined && tails[next] === tails[k])) return;
-        best = Math.max(best, source.curve.reach(from, amount) + tails[k]);
+      users.forEach((user, position) => {
+        if (user.head >= from) amount += user.amount;
+        const isLastOfItsTail = users[position + 1]?.tail !== user.tail;
+        if (amount > 0 && isLastOfItsTail) best = Math.max(best, source.curve.reach(from, amount) + user.tail);
       });
     }
     return best;
+  }
+
+  private headOf(stage: number): Minute {
+    return Math.max(this.heads[startNode(stage)], this.problem.horizon.start);
   }
 }
 
