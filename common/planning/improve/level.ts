@@ -2,6 +2,7 @@ import { check } from '../check/check';
 import { compile } from '../construct/compile';
 import { estimate } from '../construct/estimate';
 import { toPlan } from '../construct/to-plan';
+import { levelWithGaps } from '../gaps/level-with-gaps';
 import { measure } from '../objective/objective';
 import type { Plan } from '../problem/plan';
 import type { Problem } from '../problem/problem';
@@ -11,6 +12,9 @@ import { evenOut } from './even-out';
 import type { LevelOptions } from './level-options';
 import { StudioSearch } from './search-studio';
 
+/** Schedules spent on laying out a part where exact search found no whole plan. */
+const SALVAGE_SCHEDULES = 20;
+
 /** The share of schedules after which evenness is sought in what is left. */
 const EVEN_SHARE = 0.9;
 
@@ -19,6 +23,16 @@ const EVEN_SHARE = 0.9;
  * to stop. What the plan could not meet stands in `unmet`, in the checker's words. Throws only on a problem without meaning.
  */
 export function level(problem: Problem, options: LevelOptions): LevelResult {
+  const exact = levelWithGaps(problem, options);
+  if (exact === null) return levelBySearch(problem, options);
+  if (exact.plan.placements.length > 0) return exact;
+  // No plan keeps everything, or none was found: lay out what can be, and keep what was proved.
+  const maxSchedules = Math.max(1, Math.min(SALVAGE_SCHEDULES, options.maxSchedules - exact.schedules));
+  const salvaged = levelBySearch(problem, { ...options, maxSchedules });
+  return { ...salvaged, bound: exact.bound, schedules: exact.schedules + salvaged.schedules, stop: exact.stop };
+}
+
+function levelBySearch(problem: Problem, options: LevelOptions): LevelResult {
   const compiled = compile(problem);
   const searchBudget = new Budget(Math.max(1, Math.floor(options.maxSchedules * EVEN_SHARE)), options.shouldStop);
   const tell = (): void => {
