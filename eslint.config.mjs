@@ -108,6 +108,15 @@ export default defineConfig(
       '@angular-eslint/prefer-on-push-component-change-detection': 'error',
       '@angular-eslint/component-class-suffix': 'off',
       '@angular-eslint/directive-class-suffix': 'off',
+      // An attribute where a component furnishes an element of another kind: a button, a row, a part of a drawing.
+      '@angular-eslint/component-selector': [
+        'error',
+        [
+          { type: 'element', prefix: 'fettle', style: 'kebab-case' },
+          { type: 'attribute', prefix: 'fettle', style: 'camelCase' },
+        ],
+      ],
+      '@angular-eslint/directive-selector': ['error', { type: 'attribute', prefix: 'fettle', style: 'camelCase' }],
     },
   },
   {

@@ -23,7 +23,9 @@ describe('habits', () => {
   });
 
   it('keep files short', () => {
-    const long = sources.filter((path) => lines(path) > LONGEST_FILE && !LONGER_FOR_A_REASON.has(path));
+    // A migration is history: it is read once, and splitting one would make it two.
+    const growing = sources.filter((path) => !path.startsWith('database/migrations/'));
+    const long = growing.filter((path) => lines(path) > LONGEST_FILE && !LONGER_FOR_A_REASON.has(path));
     expect(long.map((path) => `${path}: ${String(lines(path))} lines`)).toEqual([]);
   });
 
@@ -38,9 +40,10 @@ describe('habits', () => {
     expect(odd).toEqual([]);
   });
 
-  it('leave no test out and none alone', () => {
+  it('leave no test out but for want of data from outside, and none alone', () => {
+    const wanting = /\w+ === null \? (describe|it)\.skip : \1\)/;
     const focused = /\b(?:it|test|describe)\.(?:only|skip|todo|failing)\b|\b(?:xit|xdescribe|xtest|fit|fdescribe)\(/;
-    expect(matching(sources.filter(isTest), focused)).toEqual([]);
+    expect(matching(sources.filter(isTest), focused, wanting)).toEqual([]);
   });
 
   it('switch no rule off without giving the reason', () => {
@@ -53,12 +56,17 @@ function lines(path: string): number {
   return read(path).trimEnd().split('\n').length;
 }
 
-function matching(paths: readonly string[], pattern: RegExp): readonly string[] {
-  return paths.flatMap((path) =>
-    read(path)
-      .split('\n')
-      .flatMap((line, index) => (pattern.test(line) && !isThisRule(path) ? [`${path}:${String(index + 1)}`] : [])),
-  );
+/** Where a pattern is found in files, line by line, but for lines that the exception excuses. */
+function matching(paths: readonly string[], pattern: RegExp, exception = /(?!)/): readonly string[] {
+  return paths
+    .filter((path) => !isThisRule(path))
+    .flatMap((path) =>
+      read(path)
+        .split('\n')
+        .flatMap((line, index) =>
+          pattern.test(line) && !exception.test(line) ? [`${path}:${String(index + 1)}`] : [],
+        ),
+    );
 }
 
 /** This file has to spell what it looks for. */
