@@ -16,6 +16,7 @@ export { layInOrder } from './construct/lay-in-order';
 export { level } from './improve/level';
 export { levelWithinDates } from './improve/level-within-dates';
 export { replaceAfterMove } from './improve/replace-after-move';
+export { layOutInOrder, takeInProgress } from './improve/lay-out-in-order';
 export type { LevelOptions } from './improve/level-options';
 export type { Move, MoveResult } from './improve/move';
 export { explain } from './explain/explain';

@@ -11,6 +11,16 @@ export interface Facts {
   readonly bays: ReadonlyMap<string, Bay>;
   /** The placement of each stage of the problem that has one; the first, where a plan holds several. */
   readonly placed: ReadonlyMap<string, Placement>;
+  /** A maker's shifts and overtime together, merged; nothing for an unknown maker. */
+  readonly presence: (makerId: string) => readonly Span[];
+  /** A maker's ordinary shifts, merged; nothing for an unknown maker. */
+  readonly shifts: (makerId: string) => readonly Span[];
+  /** When a bay is open, merged; null for always. */
+  readonly open: (bayId: string) => readonly Span[] | null;
+  /** When the studio is at work, merged. */
+  readonly working: readonly Span[];
+  /** For each stage, those whose dwell end leads to its start, each once. */
+  readonly curesBefore: (stageId: string) => readonly string[];
 }
 
 /** Looks a problem and a plan up by id. */
@@ -23,7 +33,45 @@ export function gatherFacts(problem: Problem, plan: Plan): Facts {
     const wellFormed = stages.has(placement.stageId) && placement.work.length > 0;
     if (wellFormed && !placed.has(placement.stageId)) placed.set(placement.stageId, placement);
   }
-  return { problem, stages, makers: byId(problem.makers), bays: byId(problem.bays), placed };
+  const makers = byId(problem.makers);
+  const bays = byId(problem.bays);
+  const cures = leadingCures(problem);
+  const none: readonly Span[] = [];
+  return {
+    problem,
+    stages,
+    makers,
+    bays,
+    placed,
+    presence: remember((id) => mergeSpans([...(makers.get(id)?.shifts ?? none), ...(makers.get(id)?.overtime ?? none)])),
+    shifts: remember((id) => mergeSpans(makers.get(id)?.shifts ?? none)),
+    open: remember((id) => {
+      const open = bays.get(id)?.open;
+      return open ? mergeSpans(open) : null;
+    }),
+    working: mergeSpans(problem.workingTime),
+    curesBefore: (id) => cures.get(id) ?? [],
+  };
+}
+
+function leadingCures(problem: Problem): Map<string, string[]> {
+  const cures = new Map<string, string[]>();
+  for (const link of problem.links) {
+    if (link.kind !== 'finish-start' || link.after !== 'dwell') continue;
+    const known = cures.get(link.toStageId) ?? [];
+    if (!known.includes(link.fromStageId)) known.push(link.fromStageId);
+    cures.set(link.toStageId, known);
+  }
+  return cures;
+}
+
+/** A function of an id that works out each answer once. */
+function remember<T>(workOut: (id: string) => T): (id: string) => T {
+  const known = new Map<string, T>();
+  return (id) => {
+    if (!known.has(id)) known.set(id, workOut(id));
+    return known.get(id) as T;
+  };
 }
 
 /** A broken rule with only what applies filled in. */
@@ -58,10 +106,13 @@ export function mergeSpans(spans: readonly Span[]): Span[] {
   return merged;
 }
 
-/** What two lists of spans have in common. */
+/** What two merged lists of spans have in common. */
 export function commonSpans(a: readonly Span[], b: readonly Span[]): Span[] {
   const common: Span[] = [];
-  for (let i = 0, j = 0; i < a.length && j < b.length; ) {
+  // Whatever ends before the other list begins has nothing in common with it.
+  const first = (list: readonly Span[], other: readonly Span[]): number =>
+    other.length === 0 ? list.length : firstEndingAfter(list, other[0].start);
+  for (let i = first(a, b), j = first(b, a); i < a.length && j < b.length; ) {
     const start = Math.max(a[i].start, b[j].start);
     const end = Math.min(a[i].end, b[j].end);
     if (start < end) common.push({ start, end });
@@ -69,6 +120,18 @@ export function commonSpans(a: readonly Span[], b: readonly Span[]): Span[] {
     else j += 1;
   }
   return common;
+}
+
+/** The first of merged spans that ends after an instant. */
+function firstEndingAfter(spans: readonly Span[], instant: Minute): number {
+  let low = 0;
+  let high = spans.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (spans[middle].end > instant) high = middle;
+    else low = middle + 1;
+  }
+  return low;
 }
 
 /** Minutes of `span` that lie outside merged `spans`. */

@@ -2,8 +2,8 @@ import type { Minute } from '../../time/span';
 import type { Link } from '../problem/link';
 import type { Placement } from '../problem/plan';
 import type { Unmet } from '../problem/result';
-import { commonSpans, type Facts, hasBegun, mergeSpans, totalMinutes, unmet, workEnd, workStart } from './facts';
-import { cureBefore, windowOverrun } from './work-rules';
+import { commonSpans, type Facts, hasBegun, totalMinutes, unmet, workEnd, workStart } from './facts';
+import { windowOverrun } from './work-rules';
 
 /** Every link keeps its least and its greatest gap. What both stages have behind them is not judged. */
 export function checkLinks(facts: Facts): Unmet[] {
@@ -39,8 +39,7 @@ function firstEnd(link: Link, from: Placement): Minute {
 
 function gapBetween(facts: Facts, link: Link, start: Minute, end: Minute): number {
   if (link.time === 'clock') return end - start;
-  const working = mergeSpans(facts.problem.workingTime);
-  const between = (a: Minute, b: Minute): number => totalMinutes(commonSpans([{ start: a, end: b }], working));
+  const between = (a: Minute, b: Minute): number => totalMinutes(commonSpans([{ start: a, end: b }], facts.working));
   return end >= start ? between(start, end) : -between(end, start);
 }
 
@@ -50,7 +49,7 @@ export function checkWindows(facts: Facts): Unmet[] {
   for (const [stageId, placement] of facts.placed) {
     const stage = facts.stages.get(stageId);
     if (!stage || hasBegun(stage)) continue;
-    for (const beforeId of cureBefore(facts, stageId)) {
+    for (const beforeId of facts.curesBefore(stageId)) {
       const before = facts.stages.get(beforeId);
       const beforePlacement = facts.placed.get(beforeId);
       if (!before || !beforePlacement || before.dwell?.window?.kind !== 'hard') continue;

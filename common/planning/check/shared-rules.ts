@@ -2,7 +2,7 @@ import type { Minute, Span } from '../../time/span';
 import type { Placement } from '../problem/plan';
 import type { PlaceNeed, Stage } from '../problem/problem';
 import type { Unmet } from '../problem/result';
-import { type Facts, hasBegun, mergeSpans, minutesOutside, plannedWork, unmet, workEnd, workStart } from './facts';
+import { type Facts, hasBegun, minutesOutside, plannedWork, unmet, workEnd, workStart } from './facts';
 
 /** Each place is one of its bays. */
 export function checkBayChoice(_facts: Facts, stage: Stage, placement: Placement): Unmet[] {
@@ -16,10 +16,9 @@ export function checkBayChoice(_facts: Facts, stage: Stage, placement: Placement
 export function checkBayOpen(facts: Facts, stage: Stage, placement: Placement): Unmet[] {
   const found: Unmet[] = [];
   for (const bayId of placement.bayIds) {
-    const open = facts.bays.get(bayId)?.open;
+    const open = facts.open(bayId);
     if (!open) continue;
-    const merged = mergeSpans(open);
-    const by = plannedWork(stage, placement).reduce((sum, span) => sum + minutesOutside(span, merged), 0);
+    const by = plannedWork(stage, placement).reduce((sum, span) => sum + minutesOutside(span, open), 0);
     if (by > 0) found.push(unmet('bay-open', { stageIds: [stage.id], bayIds: [bayId], by }));
   }
   return found;

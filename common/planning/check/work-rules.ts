@@ -1,3 +1,4 @@
+import type { Span } from '../../time/span';
 import type { Placement } from '../problem/plan';
 import type { Stage } from '../problem/problem';
 import type { Unmet } from '../problem/result';
@@ -49,7 +50,7 @@ function minutesWanted(facts: Facts, stage: Stage, placement: Placement): number
 /** Extra minutes that a stage owes for soft windows that it came too late for. */
 function missedWindowMinutes(facts: Facts, stage: Stage, placement: Placement): number {
   let extra = 0;
-  for (const stageId of cureBefore(facts, stage.id)) {
+  for (const stageId of facts.curesBefore(stage.id)) {
     const before = facts.stages.get(stageId);
     const beforePlacement = facts.placed.get(stageId);
     const window = before?.dwell?.window;
@@ -57,14 +58,6 @@ function missedWindowMinutes(facts: Facts, stage: Stage, placement: Placement): 
     if (windowOverrun(facts, before, beforePlacement, placement) > 0) extra += window.extraMinutes;
   }
   return extra;
-}
-
-/** Stages whose dwell end leads to this one's start, each once. */
-export function cureBefore(facts: Facts, stageId: string): Set<string> {
-  const leads = facts.problem.links.filter(
-    (link) => link.toStageId === stageId && link.kind === 'finish-start' && link.after === 'dwell',
-  );
-  return new Set(leads.map((link) => link.fromStageId));
 }
 
 /** Reference minutes (rounded up) by which a follower starts past a window; 0 when in time. */
@@ -105,8 +98,7 @@ export function checkCrewCraft(facts: Facts, stage: Stage, placement: Placement)
 export function checkCrewShift(facts: Facts, stage: Stage, placement: Placement): Unmet[] {
   const found: Unmet[] = [];
   for (const member of placement.crew) {
-    const maker = facts.makers.get(member.makerId);
-    const there = mergeSpans(maker ? [...maker.shifts, ...maker.overtime] : []);
+    const there = facts.presence(member.makerId);
     const by = plannedWork(stage, placement).reduce((sum, span) => sum + minutesOutside(span, there), 0);
     if (by > 0) found.push(unmet('crew-shift', { stageIds: [stage.id], makerIds: [member.makerId], by }));
   }
@@ -124,11 +116,11 @@ export function checkContinuity(facts: Facts, stage: Stage, placement: Placement
   if (stage.continuity !== 'shifts') {
     return [unmet('continuity', { stageIds: [stage.id], by: totalMinutes(gaps) })];
   }
-  let together = mergeSpans(gaps);
-  for (const member of placement.crew) together = commonSpans(together, mergeSpans(facts.makers.get(member.makerId)?.shifts ?? []));
+  let together: readonly Span[] = mergeSpans(gaps);
+  for (const member of placement.crew) together = commonSpans(together, facts.shifts(member.makerId));
   for (const bayId of placement.bayIds) {
-    const open = facts.bays.get(bayId)?.open;
-    if (open) together = commonSpans(together, mergeSpans(open));
+    const open = facts.open(bayId);
+    if (open) together = commonSpans(together, open);
   }
   const by = totalMinutes(together);
   return by === 0 ? [] : [unmet('continuity', { stageIds: [stage.id], by })];
@@ -153,10 +145,7 @@ export function checkAttended(facts: Facts, stage: Stage, placement: Placement):
   const minutes = stage.dwell?.attendedMinutes ?? 0;
   if (minutes === 0 || stage.progress.kind === 'finished') return [];
   const watch = { start: workEnd(placement), end: workEnd(placement) + minutes };
-  const away = placement.crew.map((member) => {
-    const maker = facts.makers.get(member.makerId);
-    return minutesOutside(watch, mergeSpans(maker ? [...maker.shifts, ...maker.overtime] : []));
-  });
+  const away = placement.crew.map((member) => minutesOutside(watch, facts.presence(member.makerId)));
   const by = Math.min(minutes, ...away);
   return by === 0 ? [] : [unmet('attended', { stageIds: [stage.id], makerIds: placement.crew.map((member) => member.makerId), by })];
 }

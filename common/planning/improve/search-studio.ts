@@ -59,7 +59,7 @@ export class StudioSearch {
     if (issued) orders.unshift(this.movableOrder(issued));
     orders.forEach((order, i) => {
       if (i > 0 && this.budget.isSpent()) return;
-      this.tryGenome(genomeOf(order), true);
+      this.tryGenome(genomeOf(order), 'if-no-worse');
     });
   }
 
@@ -76,12 +76,12 @@ export class StudioSearch {
       const operator = OPERATORS[this.chance.below(OPERATORS.length)];
       operator(candidate, { compiled: this.compiled, chance: this.chance, start: this.currentStart, late: this.currentLate });
       const slot = step % HISTORY;
-      const isBest = this.tryGenome(candidate, false, history[slot]);
+      const isBest = this.tryGenome(candidate, 'if-no-worse', history[slot]);
       history[slot].set(this.currentScore);
       sinceBetter = isBest ? 0 : sinceBetter + 1;
       if (sinceBetter < PATIENCE) continue;
       sinceBetter = 0;
-      this.tryGenome(copyGenome(this.best), true);
+      this.tryGenome(copyGenome(this.best), 'always');
       history.forEach((score) => score.set(this.currentScore));
     }
   }
@@ -91,14 +91,13 @@ export class StudioSearch {
     this.generator.decode(this.best);
   }
 
-  /** Decodes; takes the genome as current where told to or where its score is no worse; true where it is the best so far. */
-  private tryGenome(genome: Genome, mustTake: boolean, yardstick: Score = this.currentScore): boolean {
+  /** Decodes; takes the genome as current always, or where it is no worse than the current or a yardstick; true for a new best. */
+  private tryGenome(genome: Genome, take: 'always' | 'if-no-worse', yardstick: Score = this.currentScore): boolean {
     this.generator.decode(genome);
     this.budget.spend();
     this.scorer.score(this.generator, this.score);
     const isBest = compareScores(this.score, this.bestScore) < 0;
     const isNoWorse = compareScores(this.score, this.currentScore) <= 0 || compareScores(this.score, yardstick) <= 0;
-    if (mustTake ? compareScores(this.score, this.currentScore) <= 0 : isNoWorse) this.take(genome);
     if (isBest) {
       this.bestScore.set(this.score);
       this.best.order.set(genome.order);
@@ -106,6 +105,8 @@ export class StudioSearch {
       this.best.overtime.set(genome.overtime);
       this.onBetter();
     }
+    // Only now: taking a genome reorders it.
+    if (take === 'always' || isNoWorse) this.take(genome);
     return isBest;
   }
 
