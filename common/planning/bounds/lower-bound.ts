@@ -20,7 +20,7 @@ export function lowerBound(problem: Problem): LevelResult['bound'] {
   if (forward.cycle !== null) return { ...nothingKnown, unplaced: 1 };
   const heads = forward.instants;
   const isTooLate = problem.stages.some((_, k) => heads[endNode(k)] > problem.horizon.end);
-  if (isTooLate) return { ...nothingKnown, unplaced: 1 };
+  if (isTooLate || asksTooMuch(problem)) return { ...nothingKnown, unplaced: 1 };
   const finishes = new FinishBounds(problem, network, heads);
   let hardLateness = 0;
   let wishedLateness = 0;
@@ -38,6 +38,16 @@ export function lowerBound(problem: Problem): LevelResult['bound'] {
   let finishSum = 0;
   for (const ids of byProduction.values()) finishSum += finishes.of(ids) - problem.horizon.start;
   return { ...nothingKnown, hardLateness, wishedLateness, finishSum };
+}
+
+/** Whether some stage wants more of a bay than any that it may be in has. */
+function asksTooMuch(problem: Problem): boolean {
+  const capacities = new Map(problem.bays.map((bay) => [bay.id, bay.capacity]));
+  return problem.stages.some(
+    (stage) =>
+      stage.progress.kind !== 'finished' &&
+      stage.places.some((place) => place.bayIds.every((id) => place.units > (capacities.get(id) ?? 0))),
+  );
 }
 
 const nothingKnown: LevelResult['bound'] = {

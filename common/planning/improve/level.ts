@@ -1,3 +1,4 @@
+import { lowerBound } from '../bounds/lower-bound';
 import { check } from '../check/check';
 import { compile } from '../construct/compile';
 import { estimate } from '../construct/estimate';
@@ -35,20 +36,22 @@ export function level(problem: Problem, options: LevelOptions): LevelResult {
 function levelBySearch(problem: Problem, options: LevelOptions): LevelResult {
   const compiled = compile(problem);
   const searchBudget = new Budget(Math.max(1, Math.floor(options.maxSchedules * EVEN_SHARE)), options.shouldStop);
+  let bound: LevelResult['bound'] = noBound();
   const tell = (): void => {
     if (!options.onProgress) return;
     const plan = toPlan(search.generator.layout);
     const objective = measure(problem, plan, []);
-    options.onProgress({ schedules: searchBudget.schedules, objective: { ...objective, unplaced: search.bestScore[0] }, bound: noBound() });
+    options.onProgress({ schedules: searchBudget.schedules, objective: { ...objective, unplaced: search.bestScore[0] }, bound });
   };
   const search = new StudioSearch(compiled, estimate(compiled), searchBudget, options.seed, tell);
   search.construct();
+  bound = lowerBound(problem);
   search.improve();
   search.layOutBest();
   const budget = new Budget(Math.max(0, options.maxSchedules - searchBudget.schedules), options.shouldStop);
   evenOut(search.generator.layout, budget);
   const plan = toPlan(search.generator.layout);
-  return finish(problem, plan, searchBudget.schedules + budget.schedules, searchBudget.stop);
+  return { ...finish(problem, plan, searchBudget.schedules + budget.schedules, searchBudget.stop), bound };
 }
 
 /** Measures and checks a plan into a result. */
