@@ -14,8 +14,29 @@ const MOST_STAGES = 400;
  * The result has an empty plan where none was found; a bound of 1 on the unplaced then says that there is none.
  */
 export function levelWithGaps(problem: Problem, options: LevelOptions): LevelResult | null {
-  const hasMaximum = problem.links.some((link) => link.maxGapMinutes !== null);
+  const hasMaximum = problem.links.some((link) => link.maxGapMinutes !== null) || runInCircles(problem);
   const hasCrews = problem.stages.some((stage) => stage.crew.length > 0);
   if ((!hasMaximum && !hasCrews) || problem.stages.length > MOST_STAGES) return null;
   return levelExactly(problem, options);
+}
+
+/** Whether links lead from a stage back to itself: minimum gaps of nothing both ways are a maximum gap as well. */
+function runInCircles(problem: Problem): boolean {
+  const followers = new Map<string, string[]>(problem.stages.map((stage) => [stage.id, []]));
+  const waitsFor = new Map<string, number>(problem.stages.map((stage) => [stage.id, 0]));
+  for (const { fromStageId, toStageId } of problem.links) {
+    followers.get(fromStageId)?.push(toStageId);
+    waitsFor.set(toStageId, (waitsFor.get(toStageId) ?? 0) + 1);
+  }
+  const free = [...waitsFor].flatMap(([id, count]) => (count === 0 ? [id] : []));
+  let ordered = 0;
+  for (let id = free.pop(); id !== undefined; id = free.pop()) {
+    ordered++;
+    for (const next of followers.get(id) ?? []) {
+      const left = (waitsFor.get(next) ?? 0) - 1;
+      waitsFor.set(next, left);
+      if (left === 0) free.push(next);
+    }
+  }
+  return ordered < problem.stages.length;
 }
