@@ -1,5 +1,6 @@
 import type { Routes } from '@angular/router';
+import { PlanPage } from './plan-page';
 
 /** The addresses below /plan. */
-const routes: Routes = [];
+const routes: Routes = [{ path: '', component: PlanPage }];
 export default routes;

@@ -20,6 +20,8 @@ export interface LaidTape {
   readonly x: number;
   readonly y: number;
   readonly width: number;
+  /** Pixels from its own start to the next tape in its lane; infinite where none follows. What may be written there. */
+  readonly room: number;
 }
 
 /** A row with its place on the wall. */
@@ -63,6 +65,7 @@ function layOutHead(row: BoardRow, top: number, flags: number): LaidRow {
 function layOutRow(row: BoardRow, top: number, scale: TimeScale): LaidRow {
   const drawn = row.tapes.map((tape) => extentOf(tape, scale));
   const { laneOf, count } = packLanes(drawn.map(({ x, width }) => ({ from: x, to: x + width })));
+  const rooms = roomsOf(drawn, laneOf);
   const tapes = row.tapes.map((tape, index) => ({
     tape,
     rowKey: row.key,
@@ -70,8 +73,20 @@ function layOutRow(row: BoardRow, top: number, scale: TimeScale): LaidRow {
     x: drawn[index].x,
     y: top + laneTop(laneOf[index]),
     width: drawn[index].width,
+    room: rooms[index],
   }));
   return { row, top, height: rowHeight(count), lanes: count, tapes };
+}
+
+function roomsOf(drawn: readonly { readonly x: number }[], laneOf: readonly number[]): number[] {
+  const rooms = new Array<number>(drawn.length).fill(Infinity);
+  const nextX = new Map<number, number>();
+  const backwards = drawn.map((_, index) => index).sort((a, b) => drawn[b].x - drawn[a].x || b - a);
+  for (const index of backwards) {
+    rooms[index] = (nextX.get(laneOf[index]) ?? Infinity) - drawn[index].x;
+    nextX.set(laneOf[index], drawn[index].x);
+  }
+  return rooms;
 }
 
 /** Where a tape begins and how wide it is taken hold of. */

@@ -11,14 +11,24 @@ export interface BoardWindow {
 /** What is drawn beyond each edge, so that a quick scroll doesn't meet bare plaster. */
 const OVERSCAN_PX = 240;
 
-/** A window with room around it. */
+/**
+ * A window with room around it, in whole steps of that room: while one scrolls inside a step, what is drawn stays the same and
+ * nothing is worked out anew.
+ */
 export function withOverscan(window: BoardWindow): BoardWindow {
+  const before = (edge: number): number => (Math.floor(edge / OVERSCAN_PX) - 1) * OVERSCAN_PX;
+  const after = (edge: number): number => (Math.ceil(edge / OVERSCAN_PX) + 1) * OVERSCAN_PX;
   return {
-    left: window.left - OVERSCAN_PX,
-    top: window.top - OVERSCAN_PX,
-    right: window.right + OVERSCAN_PX,
-    bottom: window.bottom + OVERSCAN_PX,
+    left: before(window.left),
+    top: before(window.top),
+    right: after(window.right),
+    bottom: after(window.bottom),
   };
+}
+
+/** Whether two windows show the same. */
+export function sameWindow(a: BoardWindow, b: BoardWindow): boolean {
+  return a.left === b.left && a.top === b.top && a.right === b.right && a.bottom === b.bottom;
 }
 
 /** The rows that a window touches, found by halving: rows follow each other from the top. */

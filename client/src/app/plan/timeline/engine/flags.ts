@@ -12,8 +12,8 @@ export interface FlagInput {
   readonly text: string;
 }
 
-/** A flag with its place: `x` is its pole, `lane` the line it flies on, counted from the top. */
-export interface Flag extends FlagInput {
+/** Where a flag hangs: `x` is its pole, `lane` the line it flies on, counted from the top. */
+export interface FlagPlace {
   readonly x: number;
   readonly width: number;
   readonly lane: number;
@@ -24,7 +24,7 @@ const FLAG_PADDING_PX = 22;
 const FLAG_GAP_PX = 6;
 
 /** Hangs flags side by side where there is room and one below the other where there isn't. */
-export function hangFlags(inputs: readonly FlagInput[], scale: TimeScale): Flag[] {
+export function hangFlags<Input extends FlagInput>(inputs: readonly Input[], scale: TimeScale): (Input & FlagPlace)[] {
   const placed = inputs.map((input) => ({
     ...input,
     x: xOf(scale, input.at),
@@ -35,6 +35,6 @@ export function hangFlags(inputs: readonly FlagInput[], scale: TimeScale): Flag[
 }
 
 /** How many lines a list of flags takes; 0 for none. */
-export function flagLines(flags: readonly Flag[]): number {
+export function flagLines(flags: readonly FlagPlace[]): number {
   return flags.reduce((lines, flag) => Math.max(lines, flag.lane + 1), 0);
 }

@@ -43,6 +43,7 @@ function ghostsOfRow(
       x: extent.x,
       y: laidRow.top + laneTop(lane),
       width: extent.width,
+      room: extent.width,
       elsewhere: own === undefined,
     });
   }

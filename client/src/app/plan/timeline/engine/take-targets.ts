@@ -65,3 +65,28 @@ export function holdable(stage: Stage): 'yes' | 'started' | 'finished' | 'visit'
   if (stage.progress.kind !== 'to-do') return stage.progress.kind;
   return stage.fixedStart !== null ? 'visit' : 'yes';
 }
+
+/** Crews that could take a stage in place of its own, each with one maker changed for another who holds the same craft. */
+export function otherCrews(
+  problem: Problem,
+  placement: Placement,
+): { readonly makerId: string; readonly makerIds: readonly string[] }[] {
+  const crew = placement.crew.map((member) => member.makerId);
+  const [first] = placement.crew;
+  if (!first) return [];
+  return problem.makers
+    .filter((maker) => !crew.includes(maker.id) && maker.crafts.some((craft) => craft.craftId === first.craftId))
+    .map((maker) => ({ makerId: maker.id, makerIds: [maker.id, ...crew.slice(1)] }));
+}
+
+/** Bays that could take a stage in place of its own, each with one place changed. */
+export function otherBays(
+  stage: Stage,
+  placement: Placement,
+): { readonly bayId: string; readonly bayIds: readonly string[] }[] {
+  return stage.places.flatMap((place, index) =>
+    place.bayIds
+      .filter((bayId) => bayId !== placement.bayIds[index])
+      .map((bayId) => ({ bayId, bayIds: placement.bayIds.map((own, at) => (at === index ? bayId : own)) })),
+  );
+}
