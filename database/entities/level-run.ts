@@ -73,11 +73,7 @@ export class LevelRun {
   @Column({ type: 'jsonb', nullable: true })
   found: { readonly placements: readonly PlacementValue[] } | null;
 
-  /** The server process that works on it; its rows are failed when that process is gone. */
-  @Column({ type: 'uuid', nullable: true })
-  workedBy: string | null;
-
-  /** When that process last gave a sign of life. */
-  @Column({ type: 'timestamptz' })
-  aliveAt: Date;
+  /** The server process that works on it, by the number that it holds a lock on while it lives; see `ProcessMark`. */
+  @Column({ type: 'integer', nullable: true })
+  workedBy: number | null;
 }

@@ -72,8 +72,7 @@ export class StudioAndPlans1764547204000 implements MigrationInterface {
         stop text,
         failure text,
         found jsonb,
-        worked_by uuid,
-        alive_at timestamptz not null,
+        worked_by integer,
         constraint level_run_mode_check check (mode in ('dates', 'within-dates')),
         constraint level_run_state_check check (state in ('waiting', 'running', 'found', 'taken', 'left', 'cancelled', 'failed'))
       )
