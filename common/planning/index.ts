@@ -12,7 +12,6 @@ export { validate } from './problem/validate';
 export { fingerprint } from './problem/fingerprint';
 export { check } from './check/check';
 export { measure, compareObjectives, isBetter } from './objective/objective';
-export { layInOrder } from './construct/lay-in-order';
 export { level } from './improve/level';
 export { levelWithinDates } from './improve/level-within-dates';
 export { replaceAfterMove } from './improve/replace-after-move';
