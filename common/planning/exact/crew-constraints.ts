@@ -40,6 +40,20 @@ export function crewVariables(crews: TimedCrews, first: number): CrewVariables {
   return { choices, isIn, next };
 }
 
+/** The choices in the order to try them: first the makers whose crafts the rest of the work needs least. */
+export function sparingly(crews: TimedCrews, variables: CrewVariables): CrewChoice[] {
+  const strain = crews.craftIds.map((_, craft) => {
+    const asked = crews.needs.reduce((sum, needs) => sum + needs[craft], 0);
+    const holders = crews.holds.filter((holds) => holds[craft]).length;
+    return asked / Math.max(1, holders);
+  });
+  const worth = crews.holds.map((holds) =>
+    holds.reduce((sum, holdsIt, craft) => sum + (holdsIt ? strain[craft] : 0), 0),
+  );
+  const spared = ({ maker, craft }: CrewChoice): number => worth[maker] - strain[craft];
+  return [...variables.choices].sort((a, b) => spared(a) - spared(b));
+}
+
 /** Crews of the asked sizes, one craft for each member, and nobody in two stages that overlap. */
 export function addCrewConstraints(
   engine: Engine,

@@ -17,6 +17,8 @@ export interface Goal {
   readonly starts: readonly number[];
   /** Decided after the starts, each towards its upper bound first. */
   readonly choices: readonly number[];
+  /** The choices that belong to each start, at its place in `starts`; in some restarts they are decided right after it. */
+  readonly choicesOf: readonly (readonly number[])[];
 }
 
 const FIRST_RESTART = 100;
@@ -47,7 +49,6 @@ export class Search {
     this.order = new ActivityOrder(engine.trail);
     this.starts = Int32Array.from(goal.starts);
     this.phase = Int32Array.from({ length: engine.trail.value.length >> 1 }, (_, v) => engine.lower(v));
-    for (const variable of goal.choices) this.phase[variable] = engine.upper(variable);
     engine.analyst.onInvolved = (side, bound) => this.order.bump(side, bound);
   }
 
@@ -93,6 +94,7 @@ export class Search {
   private descend(allowance: number, shouldStop: () => boolean): 'exhausted' | 'stopped' | 'restart' {
     const { engine, goal } = this;
     const isByActivity = this.restarts % 2 === 0;
+    const isStageByStage = this.restarts % 4 === 1;
     const asksLeast = this.restarts % 4 === 0;
     let left = allowance;
     for (;;) {
@@ -113,6 +115,7 @@ export class Search {
         continue;
       }
       if (isByActivity && this.decideByActivity()) continue;
+      if (isStageByStage && this.decideOwnChoice()) continue;
       if (this.decideEarliest() || this.decideChoice()) continue;
       if (!this.accept()) return 'exhausted';
     }
@@ -148,12 +151,23 @@ export class Search {
     return true;
   }
 
+  /** A choice of a stage whose start is settled. */
+  private decideOwnChoice(): boolean {
+    const { choicesOf } = this.goal;
+    for (let k = 0; k < choicesOf.length; k++)
+      if (this.engine.isFixed(this.starts[k]) && this.decideOneOf(choicesOf[k])) return true;
+    return false;
+  }
+
   private decideChoice(): boolean {
+    return this.decideOneOf(this.goal.choices);
+  }
+
+  private decideOneOf(choices: readonly number[]): boolean {
     const { engine } = this;
-    for (const v of this.goal.choices) {
+    for (const v of choices) {
       if (engine.isFixed(v)) continue;
-      if (this.phase[v] > engine.lower(v)) engine.decide(2 * v, engine.upper(v));
-      else engine.decide(2 * v + 1, -engine.lower(v));
+      engine.decide(2 * v, engine.upper(v));
       return true;
     }
     return false;

@@ -1,4 +1,4 @@
-import { addCrewConstraints, crewVariables, type CrewVariables } from './crew-constraints';
+import { addCrewConstraints, crewVariables, sparingly, type CrewChoice, type CrewVariables } from './crew-constraints';
 import { Engine } from './engine';
 import { hallBays } from './hall-bays';
 import { addOrders, canOrder, collide, longestLags, orderPairs, type Order } from './order-pairs';
@@ -51,10 +51,13 @@ export class TimedSolver {
       this.isInfeasible = true;
       return;
     }
+    const crewChoices = model.crews !== null && this.crews !== null ? sparingly(model.crews, this.crews) : [];
+    const ofOrders = orders.flatMap((order) => [order.firstBefore, order.secondBefore].filter((v) => v >= 0));
     const goal = {
       objective: this.makespan,
       starts: [...model.durations.keys()],
-      choices: Array.from({ length: flags }, (_, k) => n + 1 + k),
+      choices: [...ofOrders, ...crewChoices.map((choice) => choice.variable)],
+      choicesOf: crewChoices.length === 0 ? [] : model.durations.map((_, stage) => choicesOf(crewChoices, stage)),
     };
     this.search = new Search(this.engine, goal, (values) => this.onBetter(this.solution(values)));
   }
@@ -119,3 +122,6 @@ export class TimedSolver {
 
 const canServe = (holds: readonly boolean[], needs: readonly number[]): boolean =>
   needs.some((need, craft) => need > 0 && holds[craft]);
+
+const choicesOf = (choices: readonly CrewChoice[], stage: number): number[] =>
+  choices.filter((choice) => choice.stage === stage).map((choice) => choice.variable);
