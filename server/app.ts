@@ -12,6 +12,7 @@ import { limitRequests } from './http/rate-limits';
 import { requestContext } from './http/request-context';
 import { securityHeaders } from './http/security-headers';
 import { mountLive, type LiveHub } from './live';
+import type { LevelRuns } from './planning';
 import { createPassport, type Authenticator, type SessionKeeping } from './session';
 import type { Transactions } from './storage/transactions';
 
@@ -23,6 +24,7 @@ export interface AppParts {
   readonly transactions: Transactions;
   readonly sessions: SessionKeeping;
   readonly live: LiveHub;
+  readonly levelRuns: LevelRuns;
   readonly readiness: Readiness;
 }
 

@@ -5,7 +5,9 @@ import { createApp } from './app';
 import type { Config } from './config';
 import { createLog, type Log } from './http/log';
 import { LiveHub } from './live';
+import { LevelPool, LevelRuns } from './planning';
 import { keepSessions } from './session';
+import { ProcessMark } from './storage/process-mark';
 import { Transactions } from './storage/transactions';
 
 const SESSION_POOL_SIZE = 4;
@@ -33,9 +35,12 @@ export async function compose(config: Config, log: Log = createLog(config.logLev
   });
   sessionPool.on('error', (error) => log.warn({ err: error }, 'an idle session connection broke'));
   const sessions = keepSessions(config, sessionPool, log, 'hourly');
-  const live = new LiveHub(config.databaseUrl, log);
+  const live = new LiveHub(config.databaseUrl, log, new ProcessMark());
   await live.start();
   const transactions = new Transactions(dataSource, log, () => new Date());
+  const levelPool = new LevelPool(config.levelWorkers ?? undefined);
+  const levelRuns = new LevelRuns(transactions, levelPool, live, log);
+  await levelRuns.failLeftBehind();
   let isReady = true;
   const app = createApp({
     config,
@@ -44,6 +49,7 @@ export async function compose(config: Config, log: Log = createLog(config.logLev
     transactions,
     sessions,
     live,
+    levelRuns,
     readiness: { isReady: () => isReady },
   });
   return {
@@ -54,6 +60,7 @@ export async function compose(config: Config, log: Log = createLog(config.logLev
     },
     endLivePages: () => live.endStreams(),
     stop: async () => {
+      await levelRuns.stop();
       await live.stop();
       await sessions.close();
       await sessionPool.end();

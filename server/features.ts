@@ -2,7 +2,10 @@ import type { FeatureParts } from './app';
 import { Bays, mountBays } from './bays';
 import { Crafts, Leaves, Makers, mountCrew } from './crew';
 import { mountFeeds } from './feeds';
+import { mountImport } from './import';
 import { Materials, mountLibrary, Recipes } from './library';
+import { createPlanningParts, mountPlanning } from './planning';
+import { createProductionParts, mountProductions } from './productions';
 import { Accounts, mountSession } from './session';
 import { mountStudio, StudioService } from './studio';
 
@@ -18,5 +21,8 @@ export function mountFeatures(parts: FeatureParts): void {
   });
   mountBays(api, new Bays(transactions));
   mountLibrary(api, { materials: new Materials(transactions), recipes: new Recipes(transactions) });
+  mountPlanning(api, createPlanningParts(transactions, parts.levelRuns));
+  mountProductions(api, createProductionParts(transactions));
+  mountImport(api, transactions);
   mountFeeds({ ...parts, publicUrl: parts.config.publicUrl });
 }

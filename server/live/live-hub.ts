@@ -1,7 +1,8 @@
 import { Client } from 'pg';
 import { LiveEvent } from '@common/contract';
 import type { Log } from '../http/log';
-import { LIVE_CHANNEL } from '../storage/live-channel';
+import { CANCEL_CHANNEL, LIVE_CHANNEL } from '../storage/live-channel';
+import type { ProcessMark } from '../storage/process-mark';
 
 const RECONNECT_MS = 1000;
 
@@ -14,6 +15,7 @@ type Listener = (event: LiveEvent) => void;
 export class LiveHub {
   readonly #listeners = new Set<Listener>();
   readonly #gapListeners = new Set<() => void>();
+  readonly #cancelListeners = new Set<(runId: string) => void>();
   #client: Client | null = null;
   #retry: NodeJS.Timeout | null = null;
   #stopped = false;
@@ -21,15 +23,21 @@ export class LiveHub {
   constructor(
     private readonly databaseUrl: string,
     private readonly log: Log,
+    /** The connection also holds the mark by which others see that this process is there. */
+    readonly mark: ProcessMark,
   ) {}
 
   async start(): Promise<void> {
     const client = new Client({ connectionString: this.databaseUrl, application_name: 'fettle live' });
-    client.on('notification', ({ payload }) => this.#pass(payload ?? ''));
+    client.on('notification', ({ channel, payload = '' }) => {
+      if (channel === CANCEL_CHANNEL) for (const listener of this.#cancelListeners) listener(payload);
+      else this.#pass(payload);
+    });
     client.on('error', (error) => this.#reconnect(client, error));
     client.on('end', () => this.#reconnect(client, null));
     await client.connect();
-    await client.query(`listen ${LIVE_CHANNEL}`);
+    await client.query(`listen ${LIVE_CHANNEL}; listen ${CANCEL_CHANNEL}`);
+    await this.mark.holdOn(client);
     this.#client = client;
   }
 
@@ -40,6 +48,7 @@ export class LiveHub {
     this.#client = null;
     this.#listeners.clear();
     this.#gapListeners.clear();
+    this.#cancelListeners.clear();
     await client?.end();
   }
 
@@ -53,6 +62,11 @@ export class LiveHub {
   onGap(listener: () => void): () => void {
     this.#gapListeners.add(listener);
     return () => this.#gapListeners.delete(listener);
+  }
+
+  /** Calls `listener` with the id of every levelling that some process was asked to cancel. */
+  onCancel(listener: (runId: string) => void): void {
+    this.#cancelListeners.add(listener);
   }
 
   /** Ends every open page's stream; each connects again by itself, to whichever process is there. */

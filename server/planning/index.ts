@@ -1,0 +1,28 @@
+/** The public file of planning: the working plan, levelling, issuing, dates and load. */
+import type { Transactions } from '../storage/transactions';
+import { Dates } from './dates';
+import { Issues } from './issues';
+import type { LevelRuns } from './level-runs';
+import { Loads } from './load-view';
+import type { PlanningParts } from './planning-routes';
+import { Proposals } from './proposals';
+import { Revisions } from './revisions';
+import { WorkingPlan } from './working-plan';
+
+export { LevelPool } from './level-pool';
+export { LevelRuns } from './level-runs';
+export { mountPlanning } from './planning-routes';
+export { readIssued } from './snapshot-repository';
+
+/** Everything that the routes of planning work with. */
+export function createPlanningParts(transactions: Transactions, levelRuns: LevelRuns): PlanningParts {
+  return {
+    workingPlan: new WorkingPlan(transactions),
+    revisions: new Revisions(transactions),
+    levelRuns,
+    proposals: new Proposals(transactions),
+    issues: new Issues(transactions),
+    dates: new Dates(transactions),
+    loads: new Loads(transactions),
+  };
+}

@@ -1,0 +1,41 @@
+import { endpoints } from '@common/contract';
+import type { Api } from '../http/api';
+import type { Dates } from './dates';
+import type { Issues } from './issues';
+import type { LevelRuns } from './level-runs';
+import type { Loads } from './load-view';
+import type { Proposals } from './proposals';
+import type { Revisions } from './revisions';
+import type { WorkingPlan } from './working-plan';
+
+/** What the routes of planning work with. */
+export interface PlanningParts {
+  readonly workingPlan: WorkingPlan;
+  readonly revisions: Revisions;
+  readonly levelRuns: LevelRuns;
+  readonly proposals: Proposals;
+  readonly issues: Issues;
+  readonly dates: Dates;
+  readonly loads: Loads;
+}
+
+/** The working plan, levelling and issuing. */
+export function mountPlanning(api: Api, parts: PlanningParts): void {
+  const { workingPlan, revisions, levelRuns, proposals, issues, dates, loads } = parts;
+  api.on(endpoints.readPlan, () => workingPlan.read());
+  api.on(endpoints.moveStage, ({ actor, body }) => revisions.move(actor, body));
+  api.on(endpoints.releasePin, ({ actor, body }) => revisions.release(actor, body));
+  api.on(endpoints.undo, ({ actor, body }) => revisions.undo(actor, body.revision));
+  api.on(endpoints.redo, ({ actor, body }) => revisions.redo(actor, body.revision));
+  api.on(endpoints.startLevel, ({ actor, body }) => levelRuns.start(actor, body));
+  api.on(endpoints.readLevel, ({ params }) => levelRuns.read(params.id));
+  api.on(endpoints.cancelLevel, ({ params }) => levelRuns.cancel(params.id));
+  api.on(endpoints.readProposal, ({ params }) => proposals.read(params.id));
+  api.on(endpoints.takeLevel, ({ actor, params, body }) => proposals.take(actor, params.id, body.revision));
+  api.on(endpoints.leaveLevel, ({ actor, params }) => levelRuns.leave(actor, params.id));
+  api.on(endpoints.previewIssue, () => issues.preview());
+  api.on(endpoints.issue, ({ actor, body }) => issues.issue(actor, body));
+  api.on(endpoints.listIssued, () => issues.list());
+  api.on(endpoints.readDates, () => dates.read());
+  api.on(endpoints.readLoad, ({ query }) => loads.read(query.by));
+}
