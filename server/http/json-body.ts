@@ -2,10 +2,11 @@ import { json, type NextFunction, type Request, type RequestHandler, type Respon
 import { Problem } from './problem';
 
 const USUAL_LIMIT = '1mb';
-const IMPORT_LIMIT = '2mb';
+// A million and a half characters, three bytes each.
+const IMPORT_LIMIT = '5mb';
 const IMPORT_PATH = /^\/api\/productions\/[^/]+\/import\/?$/;
 
-/** Reads JSON bodies, 1 MB at most (2 MB where stages are imported); a body of any other type is refused. */
+/** Reads JSON bodies, 1 MB at most (5 MB where stages are imported); a body of any other type is refused. */
 export function jsonBody(): RequestHandler {
   const usual = json({ limit: USUAL_LIMIT });
   const large = json({ limit: IMPORT_LIMIT });

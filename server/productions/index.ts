@@ -17,6 +17,7 @@ export { ProductionRepository } from './production-repository';
 export { keyDateView } from './production-mapper';
 export { handsFaults, readHands } from './stage-fitness';
 export { stageName } from './stage-name';
+export { writeUnderstoodWaits } from './links';
 
 /** Everything that the routes of productions work with. */
 export function createProductionParts(transactions: Transactions): ProductionParts {
