@@ -54,7 +54,7 @@ export function demoMakers(calendar: DemoCalendar): readonly DemoMaker[] {
         works('TU,WE,TH', '09:00', '17:00'),
         allows('SA', '09:00', '13:00'),
       ]),
-      leave: [leave('sunniva', calendar.workday(19), 4, 'Walking')],
+      leave: [leave('sunniva', calendar.workday(23), 4, 'Walking')],
       note: 'Part-time: Tuesday to Thursday.',
     },
     maker('joss', 'Joss Attery', 'JA', 2250, { woodwork: 1100, metalwork: 900, transport: 1000, design: 1000 }, [
@@ -80,7 +80,7 @@ export function demoMakers(calendar: DemoCalendar): readonly DemoMaker[] {
 
 /** A day when nobody works. */
 export function demoClosures(calendar: DemoCalendar): readonly DemoClosure[] {
-  const day = calendar.workday(16);
+  const day = calendar.workday(21);
   return [{ id: 'closure:training', name: 'First-aid and fire training', days: { from: day, until: addDays(day, 1) } }];
 }
 

@@ -70,9 +70,9 @@ const ORCHARD: ProductionPlan = {
   note: 'Opera in three acts. The trees are climbed in act two by the chorus, never above the first fork.',
   enteredAgo: 40,
   dates: [
-    { kind: 'delivery', workday: 14, time: '17:00', strength: 'wished', weight: 2 },
-    { kind: 'technical-rehearsal', workday: 15, time: '14:00', strength: 'hard', weight: 10 },
-    { kind: 'opening', workday: 20, time: '19:00', strength: 'hard', weight: 10 },
+    { kind: 'delivery', workday: 16, time: '17:00', strength: 'wished', weight: 2 },
+    { kind: 'technical-rehearsal', workday: 17, time: '14:00', strength: 'hard', weight: 10 },
+    { kind: 'opening', workday: 22, time: '19:00', strength: 'hard', weight: 10 },
   ],
   pieces: [
     {
@@ -145,6 +145,7 @@ const ORCHARD: ProductionPlan = {
         },
       ],
     },
+    { key: 'bench', name: 'Orchard bench', recipe: REFURBISHED, amounts: once(2, 2), finished: 5 },
   ],
 };
 
@@ -199,6 +200,7 @@ const TIDEWATER: ProductionPlan = {
     },
     { key: 'sea', name: 'Winter sea', recipe: BACKCLOTH, amounts: once(3), finished: 2 },
     { key: 'thwart', name: 'Boat thwart', recipe: UPHOLSTERED, amounts: once(0.7), finished: 0 },
+    { key: 'figurehead', name: 'Figurehead', recipe: REFURBISHED, amounts: once(3, 3), finished: 6 },
   ],
 };
 
