@@ -1,6 +1,8 @@
 import type { FeatureParts } from './app';
 import { Bays, mountBays } from './bays';
+import { ClientPage, mountClientPage } from './client-page';
 import { Crafts, Leaves, Makers, mountCrew } from './crew';
+import { DaySheets, mountDaySheets } from './day-sheets';
 import { mountFeeds } from './feeds';
 import { mountImport } from './import';
 import { Materials, mountLibrary, Recipes } from './library';
@@ -23,6 +25,8 @@ export function mountFeatures(parts: FeatureParts): void {
   mountLibrary(api, { materials: new Materials(transactions), recipes: new Recipes(transactions) });
   mountPlanning(api, createPlanningParts(transactions, parts.levelRuns));
   mountProductions(api, createProductionParts(transactions));
+  mountClientPage(api, new ClientPage(transactions));
+  mountDaySheets(api, new DaySheets(transactions));
   mountImport(api, transactions);
   mountFeeds({ ...parts, publicUrl: parts.config.publicUrl });
 }
