@@ -9,8 +9,6 @@ export interface ClusterFolder {
   readonly path: string;
   /** The finished cluster. It appears under this name only once it is whole. */
   readonly data: string;
-  /** A cluster being made; whatever is found here at a start was interrupted. */
-  readonly making: string;
   /** The password of both roles, readable by the owner alone. */
   readonly password: string;
   readonly log: string;
@@ -21,7 +19,6 @@ export function clusterFolder(path: string): ClusterFolder {
   return {
     path,
     data: join(path, 'data'),
-    making: join(path, 'making'),
     password: join(path, 'password'),
     log: join(path, 'log'),
   };

@@ -1,5 +1,14 @@
-import { randomBytes } from 'node:crypto';
-import { appendFileSync, chownSync, existsSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import { randomBytes, randomUUID } from 'node:crypto';
+import {
+  appendFileSync,
+  chownSync,
+  existsSync,
+  readdirSync,
+  readFileSync,
+  renameSync,
+  rmSync,
+  writeFileSync,
+} from 'node:fs';
 import { join } from 'node:path';
 import { type ClusterFolder } from './cluster-folder';
 import { Obstacle } from './obstacle';
@@ -11,6 +20,8 @@ export const SUPERUSER = 'postgres';
 
 /** The file inside the data folder that holds what we set, written anew at every start. */
 export const SETTINGS_FILE = 'fettle.conf';
+
+const MAKING = 'making-';
 
 /**
  * What a folder holds: nothing, a whole cluster, or something that looks like a cluster and cannot be one.
@@ -28,7 +39,7 @@ export function clusterState(folder: ClusterFolder): 'absent' | 'whole' | 'damag
  * left is cleared away; a damaged cluster is set aside, never deleted.
  */
 export async function ensureCluster(folder: ClusterFolder, owner: ClusterOwner): Promise<Programs> {
-  rmSync(folder.making, { recursive: true, force: true });
+  clearInterrupted(folder);
   const state = clusterState(folder);
   if (state === 'whole') return programsFor(folder);
   if (state === 'damaged') renameSync(folder.data, `${folder.data}.damaged-${String(Date.now())}`);
@@ -38,11 +49,22 @@ export async function ensureCluster(folder: ClusterFolder, owner: ClusterOwner):
   return programs;
 }
 
+/**
+ * Removes clusters whose making was interrupted. Each making has a name of its own: an initdb that outlived its
+ * launcher must find its folder gone, and not the next one's.
+ */
+function clearInterrupted(folder: ClusterFolder): void {
+  for (const name of readdirSync(folder.path).filter((entry) => entry.startsWith(MAKING))) {
+    rmSync(join(folder.path, name), { recursive: true, force: true, maxRetries: 5 });
+  }
+}
+
 async function makeCluster(folder: ClusterFolder, owner: ClusterOwner, programs: Programs): Promise<void> {
+  const making = join(folder.path, `${MAKING}${randomUUID()}`);
   writeFileSync(folder.password, randomBytes(24).toString('base64url'), { mode: 0o600 });
   if (owner.kind === 'postgres') chownSync(folder.password, owner.uid, owner.gid);
   const { code, output } = await runAs(owner, programs.initdb, [
-    ...['--pgdata', folder.making],
+    ...['--pgdata', making],
     ...['--username', SUPERUSER],
     ...['--pwfile', folder.password],
     ...['--encoding', 'UTF8', '--locale', 'C.UTF-8'],
@@ -50,10 +72,10 @@ async function makeCluster(folder: ClusterFolder, owner: ClusterOwner, programs:
     '--data-checksums',
   ]);
   if (code !== 0) throw new Obstacle(`Making the database cluster in ${folder.path} failed: ${lastLine(output)}`);
-  appendFileSync(join(folder.making, 'postgresql.conf'), `\ninclude = '${SETTINGS_FILE}'\n`);
-  writeFileSync(join(folder.making, SETTINGS_FILE), '');
-  // The one step that makes it a cluster; an interruption before it leaves only `making`.
-  renameSync(folder.making, folder.data);
+  appendFileSync(join(making, 'postgresql.conf'), `\ninclude = '${SETTINGS_FILE}'\n`);
+  writeFileSync(join(making, SETTINGS_FILE), '');
+  // The one step that makes it a cluster; an interruption before it leaves only that.
+  renameSync(making, folder.data);
 }
 
 function programsFor(folder: ClusterFolder): Programs {

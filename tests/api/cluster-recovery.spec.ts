@@ -73,13 +73,13 @@ describe('a project’s own cluster', () => {
   it(
     'makes a whole cluster where the making was interrupted, and sets a damaged one aside',
     async () => {
-      mkdirSync(join(dataFolder(), 'cluster', 'making', 'base'), { recursive: true });
-      mkdirSync(data());
-      writeFileSync(join(data(), 'PG_VERSION'), '15\n');
+      await (await open()).stop();
+      mkdirSync(join(dataFolder(), 'cluster', 'making-before', 'base'), { recursive: true });
+      rmSync(join(data(), 'global', 'pg_control'));
       const { url } = await open();
       expect(await query(url, 'select 1 as one')).toEqual([{ one: 1 }]);
       const names = readdirSync(join(dataFolder(), 'cluster'));
-      expect(names).not.toContain('making');
+      expect(names.filter((name) => name.startsWith('making'))).toEqual([]);
       expect(names.filter((name) => name.startsWith('data.damaged-'))).toHaveLength(1);
     },
     SLOW_MS,
