@@ -2,112 +2,19 @@ import fc from 'fast-check';
 import { check } from '@common/planning/check/check';
 import { levelExactly } from '@common/planning/exact/level-exactly';
 import { findConflict } from '@common/planning/gaps/conflict';
+import { bruteForce } from './support/brute-force';
 import { timedProblem, type TimedSketch } from './support/timed-problems';
+import { baySketches, crewSketches } from './support/timed-sketches';
 
 const freely = { seed: 1, maxSchedules: 100_000, shouldStop: () => false };
 
-/** The least makespan by trying every start of every stage; null where no plan exists. */
-function bruteForce(sketch: TimedSketch): number | null {
-  const n = sketch.durations.length;
-  const starts = new Array<number>(n).fill(0);
-  let best: number | null = null;
-  const visit = (stage: number): void => {
-    if (stage === n) {
-      const makespan = Math.max(0, ...starts.map((start, k) => start + sketch.durations[k]));
-      if ((best === null || makespan < best) && crewsExist(sketch, starts)) best = makespan;
-      return;
-    }
-    for (let at = 0; at + sketch.durations[stage] <= sketch.end; at++) {
-      starts[stage] = at;
-      if (fits(sketch, starts, stage)) visit(stage + 1);
-    }
-  };
-  visit(0);
-  return best;
-}
-
-function fits(sketch: TimedSketch, starts: readonly number[], last: number): boolean {
-  for (const [from, to, least, most] of sketch.gaps ?? []) {
-    if (Math.max(from, to) !== last) continue;
-    const gap = starts[to] - starts[from];
-    if (gap < least || (most !== null && gap > most)) return false;
-  }
-  return (sketch.bays ?? []).every(({ capacity, demands }) => {
-    for (let at = starts[last]; at < starts[last] + sketch.durations[last]; at++) {
-      let used = 0;
-      for (let k = 0; k <= last; k++) if (starts[k] <= at && at < starts[k] + sketch.durations[k]) used += demands[k];
-      if (used > capacity) return false;
-    }
-    return true;
-  });
-}
-
-function crewsExist(sketch: TimedSketch, starts: readonly number[]): boolean {
-  const { holds, needs, durations } = sketch;
-  if (holds === undefined || needs === undefined) return true;
-  const seats = needs.flatMap((row, stage) =>
-    row.flatMap((count, craft) => Array.from({ length: durations[stage] > 0 ? count : 0 }, () => ({ stage, craft }))),
-  );
-  const taken: { stage: number; maker: number }[] = [];
-  const overlap = (a: number, b: number): boolean =>
-    a === b || (starts[a] < starts[b] + durations[b] && starts[b] < starts[a] + durations[a]);
-  const seat = (k: number): boolean => {
-    if (k === seats.length) return true;
-    const { stage, craft } = seats[k];
-    for (let maker = 0; maker < holds.length; maker++) {
-      if (!holds[maker][craft] || taken.some((other) => other.maker === maker && overlap(other.stage, stage))) continue;
-      taken.push({ stage, maker });
-      if (seat(k + 1)) return true;
-      taken.pop();
-    }
-    return false;
-  };
-  return seat(0);
-}
-
-const gap = (n: number) =>
-  fc
-    .tuple(fc.nat(n - 1), fc.nat(n - 1), fc.integer({ min: -3, max: 4 }), fc.option(fc.nat(4)))
-    .filter(([from, to]) => from !== to)
-    .map(([from, to, least, slack]): [number, number, number, number | null] => [
-      from,
-      to,
-      least,
-      slack === null ? null : least + slack,
-    ]);
-
-const sketches = fc.integer({ min: 2, max: 4 }).chain((n) =>
-  fc.record({
-    durations: fc.array(fc.nat(3), { minLength: n, maxLength: n }),
-    gaps: fc.array(gap(n), { maxLength: 4 }),
-    bays: fc.array(
-      fc.record({
-        capacity: fc.integer({ min: 1, max: 3 }),
-        demands: fc.array(fc.nat(3), { minLength: n, maxLength: n }),
-      }),
-      { maxLength: 2 },
-    ),
-    end: fc.constant(9),
-  }),
-);
-
-const crewSketches = fc.integer({ min: 2, max: 4 }).chain((n) =>
-  fc.record({
-    durations: fc.array(fc.nat(3), { minLength: n, maxLength: n }),
-    gaps: fc.array(gap(n), { maxLength: 2 }),
-    holds: fc.array(fc.tuple(fc.boolean(), fc.boolean()), { minLength: 1, maxLength: 3 }),
-    needs: fc.array(fc.tuple(fc.nat(1), fc.nat(2)), { minLength: n, maxLength: n }),
-    end: fc.constant(9),
-  }),
-);
-
 describe('exact search', () => {
   it.each([
-    ['with bays, minimum and maximum gaps', sketches],
+    ['with bays, minimum and maximum gaps', baySketches],
     ['with crews of several crafts', crewSketches],
   ] as const)('finds what trying every start finds, %s', (_, arbitrary) => {
     fc.assert(
-      fc.property(arbitrary as fc.Arbitrary<TimedSketch>, (sketch) => {
+      fc.property(arbitrary, (sketch) => {
         const problem = timedProblem(sketch);
         const result = levelExactly(problem, freely);
         const best = bruteForce(sketch);
@@ -200,7 +107,7 @@ describe('the smallest conflict', () => {
 
   it('has nothing left to leave out', () => {
     fc.assert(
-      fc.property(sketches as fc.Arbitrary<TimedSketch>, (sketch) => {
+      fc.property(baySketches, (sketch) => {
         const conflict = findConflict(timedProblem(sketch), budget);
         if (conflict?.kind !== 'collision') return;
         for (const id of conflict.stageIds) {

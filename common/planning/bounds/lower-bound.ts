@@ -40,12 +40,13 @@ export function lowerBound(problem: Problem): LevelResult['bound'] {
   return { ...nothingKnown, hardLateness, wishedLateness, finishSum };
 }
 
-/** Whether some stage wants more of a bay than any that it may be in has. */
+/** Whether some stage that takes time wants more of a bay than any that it may be in has. */
 function asksTooMuch(problem: Problem): boolean {
   const capacities = new Map(problem.bays.map((bay) => [bay.id, bay.capacity]));
   return problem.stages.some(
     (stage) =>
       stage.progress.kind !== 'finished' &&
+      stage.effort.minutes > 0 &&
       stage.places.some((place) => place.bayIds.every((id) => place.units > (capacities.get(id) ?? 0))),
   );
 }
