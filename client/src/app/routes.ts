@@ -22,6 +22,22 @@ const pages: Routes = [
     canActivate: [onlyFor(WORKSHOP)],
     loadChildren: () => import('./productions'),
   },
+  { path: 'crew', title: 'Crew', canActivate: [onlyFor(WORKSHOP)], loadChildren: () => import('./crew') },
+  { path: 'bays', title: 'Bays', canActivate: [onlyFor(WORKSHOP)], loadChildren: () => import('./bays') },
+  { path: 'library', title: 'Library', canActivate: [onlyFor(WORKSHOP)], loadChildren: () => import('./library') },
+  { path: 'settings', title: 'Settings', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./settings') },
+  {
+    path: 'day-sheet',
+    title: 'Day sheet',
+    canActivate: [onlyFor(WORKSHOP)],
+    loadChildren: () => import('./day-sheet'),
+  },
+  {
+    path: 'client',
+    title: 'Your productions',
+    canActivate: [onlyFor(['client'])],
+    loadChildren: () => import('./client-page'),
+  },
 ];
 
 /** Every address of the application. */

@@ -3,17 +3,9 @@ import { MatButton } from '@angular/material/button';
 import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
 import { MatDivider } from '@angular/material/divider';
 import { Router } from '@angular/router';
-import type { Role } from '@common/contract';
 import { LiveEvents } from '../api';
-import { SessionStore } from '../session';
+import { ROLE_WORDS, SessionStore } from '../session';
 import { Appearance, type AppearanceChoice } from './appearance';
-
-const ROLE_WORDS: Readonly<Record<Role, string>> = {
-  owner: 'Owner',
-  manager: 'Studio manager',
-  maker: 'Maker',
-  client: 'Client',
-};
 
 const CHOICES: readonly { readonly choice: AppearanceChoice; readonly words: string }[] = [
   { choice: 'light', words: 'Light' },

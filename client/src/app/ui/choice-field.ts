@@ -11,7 +11,7 @@ export interface Choice<T> {
   readonly label: string;
 }
 
-/** One of several, or several of several where the control holds a list. */
+/** One of several things to choose. */
 @Component({
   selector: 'fettle-choice-field',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -19,12 +19,7 @@ export interface Choice<T> {
   template: `
     <mat-form-field>
       <mat-label>{{ label() }}</mat-label>
-      <mat-select
-        [formControl]="control()"
-        [multiple]="several()"
-        [required]="needed()"
-        (selectionChange)="chosen.emit()"
-      >
+      <mat-select [formControl]="control()" [required]="needed()" (selectionChange)="chosen.emit()">
         @for (one of choices(); track one.value) {
           <mat-option [value]="one.value">{{ one.label }}</mat-option>
         }
@@ -45,10 +40,8 @@ export interface Choice<T> {
 })
 export class ChoiceField<T> {
   readonly label = input.required<string>();
-  readonly control = input.required<FormControl<T> | FormControl<T[]> | FormControl<T | null>>();
+  readonly control = input.required<FormControl<T> | FormControl<T | null>>();
   readonly choices = input.required<readonly Choice<T>[]>();
-  /** Whether the control holds a list. Fixed for the life of the field. */
-  readonly several = input(false);
   readonly hint = input('');
   /** A person chose, rather than the form being filled in. */
   readonly chosen = output();

@@ -28,7 +28,7 @@ import { type FigureReader, ReadsText, WHOLE } from './reads-text';
         matInput
         class="figures"
         type="text"
-        [fettleReads]="as()"
+        [fettleReads]="reader()"
         [formControl]="control()"
         [required]="needed()"
       />
@@ -52,7 +52,7 @@ import { type FigureReader, ReadsText, WHOLE } from './reads-text';
 export class FigureField {
   readonly label = input.required<string>();
   readonly control = input.required<FormControl<number | null>>();
-  readonly as = input<FigureReader>(WHOLE);
+  readonly reader = input<FigureReader>(WHOLE);
   /** What the figure counts, written behind it. */
   readonly unit = input('');
   readonly hint = input('');

@@ -5,6 +5,7 @@ import { endpoints, type KeyDateView } from '@common/contract';
 import { KEY_DATE_NAMES } from '@common/domain/key-date';
 import { Api } from '../../api';
 import { ChoiceField, type Choice, choicesOf } from '../../ui/choice-field';
+import { ChoicesField } from '../../ui/choices-field';
 import { VersionedWrites } from '../../ui/conflict-dialog';
 import { FigureField } from '../../ui/figure-field';
 import { FormDialog } from '../../ui/form-dialog';
@@ -18,6 +19,7 @@ export interface KeyDateDialogData {
   readonly productionId: string;
   /** The key date to change; null to add one. */
   readonly keyDate: KeyDateView | null;
+  readonly pieces: readonly Choice<string>[];
 }
 
 const STRENGTHS: readonly Choice<KeyDateView['strength']>[] = [
@@ -30,7 +32,7 @@ const USUAL_WEIGHT = 10;
 @Component({
   selector: 'fettle-key-date-dialog',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [ChoiceField, FigureField, FormDialog, TextField],
+  imports: [ChoiceField, ChoicesField, FigureField, FormDialog, TextField],
   template: `
     <fettle-form-dialog
       [title]="data.keyDate ? 'Change the key date' : 'Add a key date'"
@@ -50,6 +52,14 @@ const USUAL_WEIGHT = 10;
           hint="How much lateness here counts beside other dates; 10 is usual."
         />
       </div>
+      @if (data.pieces.length > 1) {
+        <fettle-choices-field
+          label="Pieces that have to be ready by it"
+          hint="None chosen: all of them."
+          [control]="form.controls.pieceIds"
+          [choices]="data.pieces"
+        />
+      }
     </fettle-form-dialog>
   `,
 })
@@ -71,6 +81,7 @@ export class KeyDateDialog {
     day: [this.at.day, Validators.required],
     time: [this.at.time, Validators.required],
     strength: [this.data.keyDate?.strength ?? ('hard' as KeyDateView['strength'])],
+    pieceIds: new FormControl<string[]>([...(this.data.keyDate?.pieceIds ?? [])], { nonNullable: true }),
     weight: new FormControl<number | null>(this.data.keyDate?.weight ?? USUAL_WEIGHT, [
       Validators.required,
       Validators.min(1),
@@ -90,15 +101,16 @@ export class KeyDateDialog {
   }
 
   private async send(): Promise<KeyDateView | null> {
-    const { kind, day, time, strength, weight } = this.form.getRawValue();
-    const body = { kind, strength, weight: weight ?? USUAL_WEIGHT, at: fromDayAndTime(day, time, this.zone) ?? '' };
+    const { kind, day, time, strength, weight, pieceIds } = this.form.getRawValue();
+    const at = fromDayAndTime(day, time, this.zone) ?? '';
+    const body = { kind, strength, pieceIds, at, weight: weight ?? USUAL_WEIGHT };
     const { keyDate, productionId } = this.data;
     if (keyDate === null) {
       return this.api.callEndpoint(endpoints.createKeyDate, { params: { id: productionId }, body });
     }
     return this.writes.save({
       version: keyDate.version,
-      labels: { kind: 'What it is', at: 'When', strength: 'How firm', weight: 'Weight' },
+      labels: { kind: 'What it is', at: 'When', strength: 'How firm', weight: 'Weight', pieceIds: 'Pieces' },
       send: (version) =>
         this.api.callEndpoint(endpoints.changeKeyDate, { params: { id: keyDate.id }, body: { ...body, version } }),
     });

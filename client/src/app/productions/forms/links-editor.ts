@@ -37,11 +37,11 @@ const TIME_WORDS = { clock: 'By the clock', working: 'In working time' };
         <fettle-choice-field label="Stage" [control]="form.controls.fromStageId" [choices]="choices()" />
         <fettle-choice-field label="This one" [control]="form.controls.kind" [choices]="kinds" />
         <fettle-choice-field label="Counting" [control]="form.controls.after" [choices]="afters" />
-        <fettle-figure-field label="At least" [as]="clock" [control]="form.controls.minGapMinutes" />
+        <fettle-figure-field label="At least" [reader]="clock" [control]="form.controls.minGapMinutes" />
         <fettle-figure-field
           label="At most"
           hint="Empty for no limit."
-          [as]="clock"
+          [reader]="clock"
           [control]="form.controls.maxGapMinutes"
         />
         <fettle-choice-field label="Time counted" [control]="form.controls.time" [choices]="times" />

@@ -48,7 +48,7 @@ const LABELS = {
       <div class="fields">
         <fettle-text-field label="Supplier" [control]="form.controls.supplier" [longest]="120" />
         <fettle-figure-field label="Time to come" unit="days" [control]="form.controls.leadDays" />
-        <fettle-figure-field label="Cost" [as]="money" [unit]="currency" [control]="form.controls.costMinor" />
+        <fettle-figure-field label="Cost" [reader]="money" [unit]="currency" [control]="form.controls.costMinor" />
       </div>
       <div class="fields">
         <fettle-text-field label="Ordered on" type="date" [control]="form.controls.orderedOn" />

@@ -8,6 +8,7 @@ import { MILESTONE_NAMES, type MaterialMilestone } from '@common/domain/material
 import { stageFaults } from '@common/domain/stage-rules';
 import { Api, readEndpoint } from '../../api';
 import { ChoiceField, choicesOf } from '../../ui/choice-field';
+import { ChoicesField } from '../../ui/choices-field';
 import { Confirm } from '../../ui/confirm';
 import { VersionedWrites } from '../../ui/conflict-dialog';
 import { showFaults } from '../../ui/field-errors';
@@ -61,7 +62,7 @@ const WINDOW_WORDS = {
 @Component({
   selector: 'fettle-stage-dialog',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [ChoiceField, FigureField, FormDialog, LinksEditor, MatButton, NoteField, TextField],
+  imports: [ChoiceField, ChoicesField, FigureField, FormDialog, LinksEditor, MatButton, NoteField, TextField],
   templateUrl: './stage-dialog.html',
   styleUrl: './stage-dialog.scss',
 })

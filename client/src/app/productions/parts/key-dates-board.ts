@@ -31,6 +31,9 @@ import { ProductionStore } from '../production-store';
               <p class="small quiet">
                 {{ date.strength === 'hard' ? 'Hard: it can’t move' : 'Wished; weight ' + date.weight }}
               </p>
+              @if (piecesOf(date); as pieces) {
+                <p class="small quiet">For {{ pieces }}</p>
+              }
             </div>
             @if (canEdit()) {
               <div class="do">
@@ -91,13 +94,26 @@ export class KeyDatesBoard {
     keyDateCautions(this.dates().map(({ kind, at }) => ({ kind, at: Date.parse(at) }))),
   );
 
+  /** The pieces that a date is for; empty where it is for all. */
+  protected piecesOf(date: KeyDateView): string {
+    const pieces = this.store.production()?.piecesInOrder ?? [];
+    return pieces
+      .filter((piece) => date.pieceIds.includes(piece.id))
+      .map((piece) => piece.name)
+      .join(', ');
+  }
+
   protected async edit(keyDate: KeyDateView | null): Promise<void> {
     const production = this.store.production();
     if (!production) {
       return;
     }
     const opened = this.dialog.open<KeyDateDialog, KeyDateDialogData, boolean>(KeyDateDialog, {
-      data: { productionId: production.id, keyDate },
+      data: {
+        productionId: production.id,
+        keyDate,
+        pieces: production.piecesInOrder.map((piece) => ({ value: piece.id, label: piece.name })),
+      },
       width: '32rem',
     });
     if (await firstValueFrom(opened.afterClosed())) {
