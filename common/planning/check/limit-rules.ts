@@ -46,10 +46,14 @@ function shortOfRest(facts: Facts, maker: Maker, work: readonly Span[]): number 
   let dayOfLast = -1;
   let endOfLast = 0;
   for (const span of work) {
-    const day = facts.problem.days.findIndex((candidate) => candidate.start <= span.start && span.start < candidate.end);
+    const day = dayIndex(facts, span.start);
     if (dayOfLast >= 0 && day !== dayOfLast) short = Math.max(short, least - (span.start - endOfLast));
     dayOfLast = day;
     endOfLast = span.end;
   }
   return short;
+}
+
+function dayIndex(facts: Facts, instant: number): number {
+  return facts.problem.days.findIndex((day) => day.start <= instant && instant < day.end);
 }

@@ -7,11 +7,13 @@ import {
   HOLD_UNTIL,
   MOVABLE,
   NO_WINDOW,
+  SOFT_WINDOW,
   START_FINISH,
   START_START,
 } from './compiled';
 import type { Fitter } from './fitter';
 import type { Layout } from './layout';
+import { workMinutes } from './work-minutes';
 
 /** Nobody: the cause of a bound that no stage has set. */
 export const NOBODY = -1;
@@ -158,7 +160,18 @@ export class StageBounds {
       this.capFinish(high, after);
       this.lowFinish = Math.max(this.lowFinish, low);
     }
-    if (kind === FINISH_START && links.afterWork[link] === 0) this.keepWindowOpen(stage, target);
+    if (kind === FINISH_START && links.afterWork[link] === 0 && !this.paysForWindow(stage, after)) this.keepWindowOpen(stage, target);
+  }
+
+  /** Whether a placed follower is laid out with the extra effort of having missed the stage's soft window. */
+  private paysForWindow(stage: number, follower: number): boolean {
+    const { layout, compiled } = this;
+    if (compiled.work.windowKind[stage] !== SOFT_WINDOW) return false;
+    let minutes = 0;
+    for (let k = layout.spanAt[follower], left = layout.spanCount[follower]; left > 0; k += 2, left -= 1) {
+      minutes += layout.spanPool[k + 1] - layout.spanPool[k];
+    }
+    return minutes > workMinutes(compiled, follower, compiled.work.minutes[follower], layout.crew[follower]);
   }
 
   /** A follower that already has a place finds the window still open only if this stage does not end too soon. */
@@ -166,12 +179,13 @@ export class StageBounds {
     const { work } = this.compiled;
     if (work.windowKind[stage] === NO_WINDOW || work.housings[stage].length === 0) return;
     const age = work.windowAge[stage] + 1;
+    const housing = this.layout.housing[stage] ?? work.housings[stage][0];
     let low = this.lowEnd;
     let high = followerStart;
     if (low < followerStart - 2 * (age / 1000) - 1440) low = followerStart - 2 * Math.ceil(age / 1000) - 1440;
     while (low < high) {
       const middle = Math.floor((low + high) / 2);
-      if (this.fitter.curedBy(stage, work.housings[stage][0], middle, age) > followerStart) high = middle;
+      if (this.fitter.curedBy(stage, housing, middle, age) > followerStart) high = middle;
       else low = middle + 1;
     }
     this.lowEnd = Math.max(this.lowEnd, low);

@@ -9,9 +9,10 @@ import type { CompiledMakers } from './compiled';
  */
 export function compileMakers(problem: Problem, makers: readonly Maker[]): CompiledMakers {
   const { start: origin, end } = problem.horizon;
+  const weeks = Int32Array.from(problem.days, weekOf);
   const ordinary = makers.map((maker) => new Calendar(maker.shifts, origin, end - origin));
   const extended = makers.map((maker) => {
-    const overtime = maker.limits ? overtimeWithinLimits(problem.days, maker) : maker.overtime;
+    const overtime = maker.limits ? overtimeWithinLimits(problem.days, maker, weeks) : maker.overtime;
     return new Calendar([...maker.shifts, ...overtime], origin, end - origin);
   });
   return {
@@ -23,35 +24,37 @@ export function compileMakers(problem: Problem, makers: readonly Maker[]): Compi
   };
 }
 
-function overtimeWithinLimits(days: readonly StudioDay[], maker: Maker): Span[] {
-  const limits = maker.limits;
-  if (!limits) return [...maker.overtime];
+/** Walks the days once with both lists of spans in step; what is cut off is what a limit would not bear. */
+function overtimeWithinLimits(days: readonly StudioDay[], maker: Maker, weeks: Int32Array): Span[] {
+  const { limits, shifts, overtime } = maker;
+  if (!limits) return [...overtime];
   const kept: Span[] = [];
-  const weekLeft = weekAllowances(days, maker, limits.weekMinutes);
+  const weekLeft = weekAllowances(days, maker, limits.weekMinutes, weeks);
+  let nextShift = 0;
+  let nextOvertime = 0;
+  let lastEnd = -Infinity;
   days.forEach((day, d) => {
-    const shiftMinutes = minutesWithin(maker.shifts, day);
-    const nextShift = maker.shifts.find((shift) => shift.start >= day.end);
-    const previous = lastEnd([...maker.shifts, ...kept], day.start);
-    let left = Math.min(limits.dayMinutes - shiftMinutes, weekLeft[weekOf(day)]);
-    for (const span of maker.overtime) {
-      const start = Math.max(span.start, day.start, previous + limits.restBetweenMinutes);
-      const latest = (nextShift?.start ?? Infinity) - limits.restBetweenMinutes;
-      const end = Math.min(span.end, days[d].end, latest, start + Math.max(0, left));
+    const restedFrom = lastEnd + limits.restBetweenMinutes;
+    let left = Math.min(limits.dayMinutes - minutesWithin(shifts, day), weekLeft.get(weeks[d]) ?? 0);
+    for (; nextShift < shifts.length && shifts[nextShift].start < day.end; nextShift += 1) lastEnd = Math.max(lastEnd, shifts[nextShift].end);
+    const restFrom = (shifts[nextShift]?.start ?? Infinity) - limits.restBetweenMinutes;
+    while (nextOvertime < overtime.length && overtime[nextOvertime].end <= day.start) nextOvertime += 1;
+    for (let i = nextOvertime; i < overtime.length && overtime[i].start < day.end; i += 1) {
+      const start = Math.max(overtime[i].start, day.start, restedFrom);
+      const end = Math.min(overtime[i].end, day.end, restFrom, start + Math.max(0, left));
       if (end <= start) continue;
       kept.push({ start, end });
       left -= end - start;
-      weekLeft[weekOf(day)] -= end - start;
+      weekLeft.set(weeks[d], (weekLeft.get(weeks[d]) ?? 0) - (end - start));
+      lastEnd = Math.max(lastEnd, end);
     }
   });
   return kept;
 }
 
-function weekAllowances(days: readonly StudioDay[], maker: Maker, weekMinutes: number): Record<number, number> {
-  const left: Record<number, number> = {};
-  for (const day of days) {
-    const week = weekOf(day);
-    left[week] = (left[week] ?? weekMinutes) - minutesWithin(maker.shifts, day);
-  }
+function weekAllowances(days: readonly StudioDay[], maker: Maker, weekMinutes: number, weeks: Int32Array): Map<number, number> {
+  const left = new Map<number, number>();
+  days.forEach((day, d) => left.set(weeks[d], (left.get(weeks[d]) ?? weekMinutes) - minutesWithin(maker.shifts, day)));
   return left;
 }
 
@@ -61,10 +64,16 @@ function weekOf(day: StudioDay): number {
 }
 
 function minutesWithin(spans: readonly Span[], day: Span): number {
-  return spans.reduce((sum, span) => sum + Math.max(0, Math.min(span.end, day.end) - Math.max(span.start, day.start)), 0);
-}
-
-/** The end of the last span that starts before an instant. */
-function lastEnd(spans: readonly Span[], instant: number): number {
-  return spans.reduce((last, span) => (span.start < instant ? Math.max(last, span.end) : last), -Infinity);
+  let low = 0;
+  let high = spans.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (spans[middle].end > day.start) high = middle;
+    else low = middle + 1;
+  }
+  let minutes = 0;
+  for (let i = low; i < spans.length && spans[i].start < day.end; i += 1) {
+    minutes += Math.min(spans[i].end, day.end) - Math.max(spans[i].start, day.start);
+  }
+  return minutes;
 }

@@ -18,7 +18,10 @@ export function placeFixed(layout: Layout, fitter: Fitter, bounds: StageBounds):
     if (fixity[stage] === FINISHED) placeFinished(layout, fitter, stage);
     else if (fixity[stage] === STARTED) placeStarted(layout, fitter, stage);
     else if (fixity[stage] === FROZEN) placeFrozen(layout, fitter, stage);
-    else if (fixity[stage] === FIXED_START) placeAt(layout, fitter, bounds, stage, fixedStart[stage], null);
+    else if (fixity[stage] === FIXED_START) {
+      bounds.gather(stage, 0);
+      placeAt(layout, fitter, stage, fixedStart[stage], owedFor(bounds, fixedStart[stage]), null);
+    }
   }
 }
 
@@ -67,22 +70,27 @@ function placeFrozen(layout: Layout, fitter: Fitter, stage: number): void {
   layout.place(stage, fit, crew, housing);
 }
 
-/** Lays a stage exactly at a start, by the strictest reading of the rules that allows it; its crew and bays are chosen. */
+/**
+ * Lays a stage exactly at a start, by the strictest reading of the rules that allows it; its crew and bays are chosen.
+ * `extraEffort` is what it owes for windows missed, in minutes.
+ */
 export function placeAt(
   layout: Layout,
   fitter: Fitter,
-  bounds: StageBounds,
   stage: number,
   start: number,
+  extraEffort: number,
   only: Choice | null,
 ): void {
-  bounds.gather(stage, 0);
-  let extra = 0;
-  bounds.softUntil.forEach((until, k) => {
-    if (start > until) extra += bounds.softExtra[k];
-  });
-  const found = firstFit(layout, fitter, stage, start, start, ['none', 'bays', 'other-work', 'calendars'], only, extra);
+  const found = firstFit(layout, fitter, stage, start, start, ['none', 'bays', 'other-work', 'calendars'], only, extraEffort);
   layout.place(stage, found.fit, found.crew, found.housing);
+}
+
+/** The effort that a stage which starts at an instant owes for soft windows that it misses, by the bounds gathered for it. */
+export function owedFor(bounds: StageBounds, start: number): number {
+  let extra = 0;
+  for (let k = 0; k < bounds.softUntil.length; k += 1) if (start > bounds.softUntil[k]) extra += bounds.softExtra[k];
+  return extra;
 }
 
 /** Crew and bays that a hand has chosen; null for the engine to choose. */

@@ -92,6 +92,9 @@ export class Layout {
   /** Forgets every placement. */
   clear(): void {
     this.isPlaced.fill(0);
+    // What a stage last had is still asked for after it is taken out; it must not outlive the plan.
+    this.crew.fill(null);
+    this.housing.fill(null);
     for (const booking of this.bookings) booking.clear();
     for (const bay of this.bays) bay.clear();
     for (const holds of this.openHolds) holds.length = 0;

@@ -1,5 +1,6 @@
 import { StageBounds } from '../construct/bounds-of-stage';
 import { NEVER } from '../construct/calendar';
+import { FINISH_START, SOFT_WINDOW } from '../construct/compiled';
 import { type Ask, Fitter } from '../construct/fitter';
 import { copyFit, type Fit, type Layout, newFit } from '../construct/layout';
 import { workMinutes } from '../construct/work-minutes';
@@ -93,7 +94,7 @@ class Evener {
   private askFor(stage: number, was: Fit): Ask | null {
     const { bounds, layout } = this;
     bounds.gather(stage, 0);
-    if (bounds.softUntil.some((until) => was.start > until)) return null;
+    if (bounds.softUntil.some((until) => was.start > until) || this.isPaidFor(stage)) return null;
     bounds.hardenWindows();
     const isAmiss = was.start < bounds.lowStart || was.end < bounds.lowEnd || was.finish < bounds.lowFinish || !this.isAllowed(was, stage);
     if (isAmiss) return null;
@@ -102,6 +103,19 @@ class Evener {
       stage, crew: null, housing: null, minutes, overtime: false,
       lowStart: bounds.lowStart, lowEnd: bounds.lowEnd, lowFinish: bounds.lowFinish, lastStart: bounds.highStart,
     };
+  }
+
+  /** Whether some follower pays for having missed the stage's soft window: then the two are not moved against one another. */
+  private isPaidFor(stage: number): boolean {
+    const { layout } = this;
+    const { links, work } = layout.compiled;
+    if (work.windowKind[stage] !== SOFT_WINDOW) return false;
+    for (let k = links.outOf[stage]; k < links.outOf[stage + 1]; k += 1) {
+      const link = links.outLinks[k];
+      const leads = links.kind[link] === FINISH_START && links.afterWork[link] === 0;
+      if (leads && layout.start[links.to[link]] > layout.windowEnd(stage)) return true;
+    }
+    return false;
   }
 
   private isAllowed(fit: Fit, stage: number): boolean {

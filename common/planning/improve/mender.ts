@@ -2,12 +2,12 @@ import { StageBounds } from '../construct/bounds-of-stage';
 import { NEVER } from '../construct/calendar';
 import { type Compiled, type Crew, HOLD_DWELL, HOLD_UNTIL, MOVABLE } from '../construct/compiled';
 import { type Ask, Fitter } from '../construct/fitter';
-import { placeAt } from '../construct/fixed-stages';
+import { owedFor, placeAt } from '../construct/fixed-stages';
 import { copyFit, type Fit, type Layout, newFit } from '../construct/layout';
 import { workMinutes } from '../construct/work-minutes';
 
 /** A stage gives way at most so often in one move, which ends chases between maximum gaps. */
-const MOST_TURNS_OF_STAGE = 4;
+const MOST_TURNS_OF_STAGE = 12;
 
 /** A stage taken out, with all that is needed to lay it back. */
 interface Lifted {
@@ -48,10 +48,14 @@ export class Mender {
     const wasPlaced = layout.isPlaced[stage] === 1;
     const oldCrew = wasPlaced ? layout.crew[stage] : null;
     const oldHousing = wasPlaced ? layout.housing[stage] : null;
-    if (wasPlaced) layout.unplace(stage);
     const at = start ?? (wasPlaced ? this.stood[stage] : 0);
+    const stays = wasPlaced && at === this.stood[stage] && isAmong(crews, oldCrew, sameMakers) && isAmong(housings, oldHousing, sameBays);
+    if (stays) return;
+    if (wasPlaced) layout.unplace(stage);
+    this.bounds.gather(stage, 0);
+    const owed = owedFor(this.bounds, at);
     const lifted = this.liftMovables();
-    placeAt(layout, this.fitter, this.bounds, stage, at, {
+    placeAt(layout, this.fitter, stage, at, owed, {
       crews: crews ?? (oldCrew ? [oldCrew] : null),
       housings: housings ?? (oldHousing ? [oldHousing] : null),
     });
@@ -155,11 +159,7 @@ export class Mender {
   }
 
   private minutesOwed(stage: number, crew: Crew | null, start: number): number {
-    let extra = 0;
-    this.bounds.softUntil.forEach((until, k) => {
-      if (start > until) extra += this.bounds.softExtra[k];
-    });
-    return workMinutes(this.compiled, stage, this.compiled.work.minutes[stage] + extra, crew);
+    return workMinutes(this.compiled, stage, this.compiled.work.minutes[stage] + owedFor(this.bounds, start), crew);
   }
 
   /** Lays a stage out again, no earlier than it stood, beside everything else; then looks at what that touches. */
@@ -282,4 +282,17 @@ function minutesOf(fit: Fit): number {
   let minutes = 0;
   for (let s = 0; s < fit.spanCount; s += 1) minutes += fit.spans[2 * s + 1] - fit.spans[2 * s];
   return minutes;
+}
+
+/** Whether what a stage has is among what it may have; anything is where nothing is said. */
+function isAmong<T>(wanted: readonly T[] | null, has: T | null, isSame: (a: T, b: T) => boolean): boolean {
+  return wanted === null || wanted.some((one) => has !== null && isSame(one, has)) || (has === null && wanted.length === 0);
+}
+
+function sameMakers(a: Crew, b: Crew): boolean {
+  return sameBays(a.makers.slice().sort(), b.makers.slice().sort());
+}
+
+function sameBays(a: Int32Array, b: Int32Array): boolean {
+  return a.length === b.length && a.every((item, k) => item === b[k]);
 }

@@ -22,11 +22,18 @@ function bestPaces(makers: readonly Maker[], craftId: string, most: number): num
   return paces.sort((a, b) => b - a).slice(0, most);
 }
 
-/** The fewest minutes by the clock that a stage's dwell can take, at the fastest rate it may meet. */
-export function leastDwellMinutes(stage: Stage, advances: readonly AdvanceProfile[]): number {
+/** The fewest minutes by the clock that a stage's dwell can take, at the fastest rate that it may meet anywhere. */
+export function leastDwellMinutes(stage: Stage, fastest: FastestRates): number {
   if (!stage.dwell) return 0;
-  const ids = new Set(Object.values(stage.dwell.advance));
-  const rates = advances.filter((profile) => ids.has(profile.id)).flatMap((profile) => profile.permille);
-  const fastest = Math.max(1000, ...rates);
-  return Math.ceil((stage.dwell.minutes * 1000) / fastest);
+  let rate = 1000;
+  for (const id of Object.values(stage.dwell.advance)) rate = Math.max(rate, fastest.get(id) ?? 0);
+  return Math.ceil((stage.dwell.minutes * 1000) / rate);
+}
+
+/** The highest rate, in permille, of each advance profile. */
+export type FastestRates = ReadonlyMap<string, number>;
+
+/** Finds the highest rate of each profile once, for all stages. */
+export function fastestRates(advances: readonly AdvanceProfile[]): FastestRates {
+  return new Map(advances.map((profile) => [profile.id, profile.permille.reduce((most, rate) => Math.max(most, rate), 0)]));
 }

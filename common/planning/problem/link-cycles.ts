@@ -1,4 +1,4 @@
-import { leastDwellMinutes, leastWorkMinutes } from './least-minutes';
+import { fastestRates, leastDwellMinutes, leastWorkMinutes } from './least-minutes';
 import type { Problem } from './problem';
 
 /** Stages whose links chase one another round, and the minutes by which a round trip comes out too long. */
@@ -40,10 +40,11 @@ export function findLinkCycles(problem: Problem): LinkCycle[] {
 
 function collectEdges(problem: Problem): Edge[] {
   const edges: Edge[] = [];
+  const fastest = fastestRates(problem.advances);
   const index = new Map(problem.stages.map((stage, i) => [stage.id, i]));
   problem.stages.forEach((stage, i) => {
     const work = leastWorkMinutes(stage, problem.makers);
-    const dwell = leastDwellMinutes(stage, problem.advances);
+    const dwell = leastDwellMinutes(stage, fastest);
     const finite = Number.isFinite(work) ? work : 0;
     edges.push({ from: 3 * i, to: 3 * i + 1, minutes: finite }, { from: 3 * i + 1, to: 3 * i + 2, minutes: dwell });
     if (stage.continuity === 'clock' && stage.progress.kind === 'to-do') {
