@@ -8,13 +8,14 @@ import { mountImport } from './import';
 import { Materials, mountLibrary, Recipes } from './library';
 import { createPlanningParts, mountPlanning } from './planning';
 import { createProductionParts, mountProductions } from './productions';
-import { Accounts, mountSession } from './session';
+import { Accounts, mountGoogle, mountSession } from './session';
 import { mountStudio, StudioService } from './studio';
 
 /** Every feature's routes, made and mounted. */
 export function mountFeatures(parts: FeatureParts): void {
   const { api, transactions } = parts;
   mountSession(api, { ...parts, accounts: new Accounts(transactions) });
+  mountGoogle(parts);
   mountStudio(api, new StudioService(transactions));
   mountCrew(api, {
     crafts: new Crafts(transactions),

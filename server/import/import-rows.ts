@@ -1,6 +1,6 @@
 import { PLAIN_LINK } from '@common/domain/stage-draft';
 import { Piece, type Link, type Stage } from '@database/entities';
-import { draftRow } from '../storage/drafts';
+import { draftRow } from '@database/draft-row';
 import type { StoredPiece } from './import-repository';
 import type { PlannedStage, StageRef } from './read-stages';
 

@@ -23,6 +23,8 @@ declare global {
 declare module 'express-session' {
   interface SessionData {
     formToken: string;
+    /** Where to go once Google has said who it is. */
+    googleReturn: string;
   }
 }
 

@@ -7,3 +7,4 @@ export { keepSessions, type SessionKeeping } from './session-cookie';
 export { mountSession } from './session-routes';
 export { beginSession, createPassport, type Authenticator } from './sign-in';
 export { hashPassword } from './passwords';
+export { mountGoogle } from './google-routes';
