@@ -24,7 +24,11 @@ export class ClientPage {
   }
 }
 
-function viewOf(production: Production, entries: ReadonlyMap<string, IssuedEntry>, links: readonly Link[]): ClientProduction {
+function viewOf(
+  production: Production,
+  entries: ReadonlyMap<string, IssuedEntry>,
+  links: readonly Link[],
+): ClientProduction {
   const pieces = [...production.pieces].sort((a, b) => a.position - b.position);
   const stages = pieces.flatMap((piece) => piece.stages);
   const ready = stages.flatMap((stage) => entries.get(stage.id)?.dwellEndsAt.getTime() ?? []);

@@ -46,7 +46,10 @@ export class CrewRepository {
     await this.manager.upsert(Maker, row, ['id']);
     if (parts.crafts) {
       await this.manager.delete(MakerCraft, { makerId: maker.id });
-      await this.manager.insert(MakerCraft, parts.crafts.map((craft) => ({ ...craft, makerId: maker.id })));
+      await this.manager.insert(
+        MakerCraft,
+        parts.crafts.map((craft) => ({ ...craft, makerId: maker.id })),
+      );
     }
     if (parts.patterns) {
       await this.manager.delete(MakerPattern, { makerId: maker.id });

@@ -5,7 +5,10 @@ import type { Leaves } from './leaves';
 import type { Makers } from './makers';
 
 /** Crafts, makers and their leave. */
-export function mountCrew(api: Api, { crafts, makers, leaves }: { crafts: Crafts; makers: Makers; leaves: Leaves }): void {
+export function mountCrew(
+  api: Api,
+  { crafts, makers, leaves }: { crafts: Crafts; makers: Makers; leaves: Leaves },
+): void {
   api.on(endpoints.listCrafts, () => crafts.list());
   api.on(endpoints.createCraft, ({ actor, body }) => crafts.create(actor, body));
   api.on(endpoints.removeCraft, ({ actor, params }) => crafts.remove(actor, params.id));

@@ -32,7 +32,10 @@ export class DaySheetRepository {
     return this.manager
       .createQueryBuilder(IssuedEntry, 'entry')
       .where('entry.planNumber = :planNumber', { planNumber })
-      .andWhere('entry.dwellEndsAt > entry.endsAt and entry.endsAt < :until and entry.dwellEndsAt > :from', { from, until })
+      .andWhere('entry.dwellEndsAt > entry.endsAt and entry.endsAt < :until and entry.dwellEndsAt > :from', {
+        from,
+        until,
+      })
       .orderBy('entry.dwellEndsAt')
       .getMany();
   }

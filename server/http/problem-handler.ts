@@ -51,7 +51,10 @@ function parserProblem(error: unknown): Problem | null {
       return new Problem('too-large', 'The body is larger than this route takes. Send less at once.');
     case 'encoding.unsupported':
     case 'charset.unsupported':
-      return new Problem('unsupported-media', 'Send JSON as UTF-8, not compressed otherwise than by gzip, deflate or br.');
+      return new Problem(
+        'unsupported-media',
+        'Send JSON as UTF-8, not compressed otherwise than by gzip, deflate or br.',
+      );
     case 'request.aborted':
     case 'request.size.invalid':
       return new Problem('malformed-request', 'The body did not arrive whole.');

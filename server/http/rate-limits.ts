@@ -31,7 +31,9 @@ export function limitSignIns(limits: RateLimits): RequestHandler {
     skipSuccessfulRequests: true,
     keyGenerator: (request: Request) => `${ipKeyGenerator(request.ip ?? '')} ${emailOf(request)}`,
     handler: (_request, _response, next) => {
-      next(new Problem('too-many-attempts', 'Too many sign-ins went wrong. Wait a quarter of an hour, then try again.'));
+      next(
+        new Problem('too-many-attempts', 'Too many sign-ins went wrong. Wait a quarter of an hour, then try again.'),
+      );
     },
   });
 }

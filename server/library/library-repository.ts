@@ -10,7 +10,7 @@ import {
   RecipeStepPlace,
   RecipeStepPlaceBay,
 } from '@database/entities';
-import { draftRow } from '../storage/drafts';
+import { draftRow } from '@database/draft-row';
 
 const RECIPE_PARTS = { steps: { crew: true, places: { bays: true } } } as const;
 
@@ -27,7 +27,11 @@ export class LibraryRepository {
   }
 
   material(id: string): Promise<Material | null> {
-    return this.manager.findOne(Material, { where: { id }, relations: { dwells: true }, relationLoadStrategy: 'query' });
+    return this.manager.findOne(Material, {
+      where: { id },
+      relations: { dwells: true },
+      relationLoadStrategy: 'query',
+    });
   }
 
   /** Writes a material's own row, and its dwells in place of those before, where given. */

@@ -59,7 +59,9 @@ async function requireMaterial(repository: LibraryRepository, id: string): Promi
 function requireSound(dwells: MaterialView['dwells']): void {
   const faults: FieldFault[] = dwells.flatMap(({ milestone, minimumCelsius, maximumCelsius }, i) => {
     if (dwells.findIndex((other) => other.milestone === milestone) < i) {
-      return [{ pointer: `/dwells/${i}/milestone`, detail: 'This is said twice; a material has one dwell of each kind.' }];
+      return [
+        { pointer: `/dwells/${i}/milestone`, detail: 'This is said twice; a material has one dwell of each kind.' },
+      ];
     }
     const isReversed = minimumCelsius !== null && maximumCelsius !== null && minimumCelsius > maximumCelsius;
     return isReversed

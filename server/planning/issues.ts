@@ -15,7 +15,8 @@ import { requireDesk } from './revisions';
  */
 const MAY_BE_ISSUED: ReadonlySet<Unmet['rule']> = new Set(['key-date', 'placed-once', 'limits']);
 
-const STALE = 'Stages, makers or dates changed since this plan was laid out. Level it, or move a stage, to bring it up to date.';
+const STALE =
+  'Stages, makers or dates changed since this plan was laid out. Level it, or move a stage, to bring it up to date.';
 
 /** The plan that the studio works to: what issuing would change, and issuing. */
 export class Issues {
@@ -34,13 +35,19 @@ export class Issues {
         forMakers: [...counts].map(([makerId, count]) => ({ makerId, changes: count })),
         keyDates: keyDateEffects(desk.problem, before, desk.plan),
         obstacles: [...(desk.isStale ? [STALE] : []), ...sayAll(desk, obstaclesOf(desk))],
-        warnings: sayAll(desk, desk.unmet.filter(({ rule }) => MAY_BE_ISSUED.has(rule))),
+        warnings: sayAll(
+          desk,
+          desk.unmet.filter(({ rule }) => MAY_BE_ISSUED.has(rule)),
+        ),
       };
     });
   }
 
   /** Issues the working plan as it stands at `revision`, if it answers the studio as it is and breaks nothing that matters. */
-  issue(actor: Actor, { revision, note }: { readonly revision: number; readonly note: string }): Promise<IssuedPlanSummary> {
+  issue(
+    actor: Actor,
+    { revision, note }: { readonly revision: number; readonly note: string },
+  ): Promise<IssuedPlanSummary> {
     return this.transactions.write(actor, async (unit) => {
       const desk = await requireDesk(unit, revision);
       if (desk.head === null || desk.isStale) throw new Problem('plan-stale', STALE);
@@ -64,7 +71,14 @@ export class Issues {
       await repository.add(row);
       await repository.addRows(number, desk.problem, desk.plan);
       await unit.announce({ kind: 'plan-issued', number });
-      const summary = { number, at: unit.at.toISOString(), by: actor.name, note, stages: desk.plan.placements.length, changes: row.changes };
+      const summary = {
+        number,
+        at: unit.at.toISOString(),
+        by: actor.name,
+        note,
+        stages: desk.plan.placements.length,
+        changes: row.changes,
+      };
       const sentence = `Issued plan ${String(number)}${note === '' ? '.' : `: ${note}`}`;
       await unit.record({ action: 'issued', subject: { kind: 'issued-plan', id: null }, sentence, after: summary });
       return summary;

@@ -17,7 +17,12 @@ export interface LevelJob {
 /** What a worker says. */
 export type LevelMessage =
   | { readonly protocol: typeof PROTOCOL; readonly kind: 'progress'; readonly progress: LevelProgress }
-  | { readonly protocol: typeof PROTOCOL; readonly kind: 'found'; readonly result: LevelResult; readonly endedBy: LevelEnd }
+  | {
+      readonly protocol: typeof PROTOCOL;
+      readonly kind: 'found';
+      readonly result: LevelResult;
+      readonly endedBy: LevelEnd;
+    }
   | { readonly protocol: typeof PROTOCOL; readonly kind: 'failed'; readonly failure: string };
 
 /** Why a levelling ended: by itself, by the time it was given, or because it was told to. */

@@ -49,11 +49,7 @@ export class LevelPool {
   ) {}
 
   /** Starts a task when a worker is free. */
-  level(
-    task: LevelTask,
-    onStart: () => void,
-    onProgress: (progress: LevelProgress) => void,
-  ): RunningLevel {
+  level(task: LevelTask, onStart: () => void, onProgress: (progress: LevelProgress) => void): RunningLevel {
     const cancel = new SharedArrayBuffer(Int32Array.BYTES_PER_ELEMENT);
     const job: LevelJob = { ...task, protocol: PROTOCOL, cancel };
     let seat: Seat | undefined;

@@ -18,7 +18,9 @@ type Want = Omit<Occupancy, 'slot'>;
  * beyond the capacity, which the database then refuses.
  */
 export function occupanciesOf(problem: Problem, plan: Plan): Occupancy[] {
-  const wants = wantsOf(problem, plan).sort((a, b) => a.start - b.start || a.end - b.end || compare(a.stageId, b.stageId));
+  const wants = wantsOf(problem, plan).sort(
+    (a, b) => a.start - b.start || a.end - b.end || compare(a.stageId, b.stageId),
+  );
   const freeFrom = new Map<string, number[]>();
   return wants.map((want) => {
     const slots = freeFrom.get(want.bayId) ?? [];
@@ -47,7 +49,11 @@ function wantsOf(problem: Problem, plan: Plan): Want[] {
   });
 }
 
-function holdEnd(hold: Stage['places'][number]['hold'], placement: Placement, ends: ReadonlyMap<string, number>): number {
+function holdEnd(
+  hold: Stage['places'][number]['hold'],
+  placement: Placement,
+  ends: ReadonlyMap<string, number>,
+): number {
   switch (hold.kind) {
     case 'work':
       return endOf(placement);

@@ -43,11 +43,7 @@ export class RevisionRepository {
   async standAt(unit: Unit, studio: Studio, id: string): Promise<number> {
     studio.headRevisionId = id;
     studio.planRevision += 1;
-    await this.manager.update(
-      Studio,
-      { id: studio.id },
-      { headRevisionId: id, planRevision: studio.planRevision },
-    );
+    await this.manager.update(Studio, { id: studio.id }, { headRevisionId: id, planRevision: studio.planRevision });
     await unit.announce({ kind: 'plan-revised', revision: studio.planRevision });
     return studio.planRevision;
   }

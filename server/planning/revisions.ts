@@ -32,7 +32,10 @@ export class Revisions {
   }
 
   /** Lets a pinned stage go; it stays where it is until something moves it. */
-  release(actor: Actor, { revision, stageId }: { readonly revision: number; readonly stageId: string }): Promise<Revised> {
+  release(
+    actor: Actor,
+    { revision, stageId }: { readonly revision: number; readonly stageId: string },
+  ): Promise<Revised> {
     return this.transactions.write(actor, async (unit) => {
       const desk = await requireDesk(unit, revision);
       if (!(stageId in desk.pins)) throw invalidField('/stageId', 'This stage is not pinned.');
@@ -65,7 +68,11 @@ export class Revisions {
     });
   }
 
-  async #store(unit: Unit, desk: Desk, made: Pick<Desk, 'pins' | 'plan'> & { readonly label: string }): Promise<Revised> {
+  async #store(
+    unit: Unit,
+    desk: Desk,
+    made: Pick<Desk, 'pins' | 'plan'> & { readonly label: string },
+  ): Promise<Revised> {
     const { label, pins, plan } = made;
     const count = await new RevisionRepository(unit.manager).add(unit, desk.rows.studio, {
       parentId: desk.head?.id ?? null,
@@ -126,6 +133,9 @@ function requireMovable(desk: Desk, { stageId, start, makerIds, bayIds }: z.outp
   const bays = new Set(desk.problem.bays.map((bay) => bay.id));
   if (bayIds?.some((id) => !bays.has(id))) throw invalidField('/bayIds', 'There is no such bay in use.');
   if (bayIds && bayIds.length !== stage.places.length) {
-    throw invalidField('/bayIds', `${desk.names.stage(stageId)} works in ${String(stage.places.length)} places; name a bay for each.`);
+    throw invalidField(
+      '/bayIds',
+      `${desk.names.stage(stageId)} works in ${String(stage.places.length)} places; name a bay for each.`,
+    );
   }
 }

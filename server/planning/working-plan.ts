@@ -23,7 +23,9 @@ export class WorkingPlan {
     await this.transactions.write(null, async (unit) => {
       if (await wantsFirstLayout(unit.manager, await readDesk(unit.manager, unit.at))) await layOutFirst(unit);
     });
-    return this.transactions.read(async (manager) => viewOf(manager, await readDesk(manager, this.transactions.clock())));
+    return this.transactions.read(async (manager) =>
+      viewOf(manager, await readDesk(manager, this.transactions.clock())),
+    );
   }
 
   #readUnlessUnmade(): Promise<WorkingPlanView | null> {
@@ -67,7 +69,11 @@ async function viewOf(manager: EntityManager, desk: Desk): Promise<WorkingPlanVi
   if (head === null) throw new Error('There is no working plan although one was laid out.');
   const revisions = new RevisionRepository(manager);
   const next = await revisions.newestChild(head.id);
-  const issued = await manager.findOne(IssuedPlan, { where: {}, order: { number: 'DESC' }, relations: { issuer: true } });
+  const issued = await manager.findOne(IssuedPlan, {
+    where: {},
+    order: { number: 'DESC' },
+    relations: { issuer: true },
+  });
   return {
     revision: rows.studio.planRevision,
     label: head.label,

@@ -86,13 +86,21 @@ export class Pieces {
 }
 
 /** Refuses to take stages away that a purchase is for, or that another stage keeps its place until. */
-export async function requireUnneeded(repository: StageRepository, ids: readonly string[], what: string): Promise<void> {
+export async function requireUnneeded(
+  repository: StageRepository,
+  ids: readonly string[],
+  what: string,
+): Promise<void> {
   const purchase = await repository.purchaseFor(ids);
   if (purchase) {
-    throw new Problem('still-in-use', `The purchase “${purchase.name}” is for ${what}; move it to another stage first.`);
+    throw new Problem(
+      'still-in-use',
+      `The purchase “${purchase.name}” is for ${what}; move it to another stage first.`,
+    );
   }
   const keeper = await repository.keeperUntil(ids);
-  if (keeper) throw new Problem('still-in-use', `“${keeper.name}” keeps its place until ${what} is done; change that first.`);
+  if (keeper)
+    throw new Problem('still-in-use', `“${keeper.name}” keeps its place until ${what} is done; change that first.`);
 }
 
 async function requirePiece(repository: StageRepository, id: string): Promise<Piece> {

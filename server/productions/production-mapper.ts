@@ -64,7 +64,16 @@ export function stageViewFor(viewer: Actor, stage: Stage): StageView {
   const view = stageView(stage);
   if (viewer.role !== 'client') return view;
   const nothing = { lowMinutes: 0, likelyMinutes: 0, highMinutes: 0 };
-  return { ...view, handsOn: nothing, crew: [], places: [], note: '', cautions: [], spentMinutes: 0, remainingMinutes: null };
+  return {
+    ...view,
+    handsOn: nothing,
+    crew: [],
+    places: [],
+    note: '',
+    cautions: [],
+    spentMinutes: 0,
+    remainingMinutes: null,
+  };
 }
 
 export function linkView(link: Link): StageLink {
@@ -115,7 +124,10 @@ export interface WholeProduction {
 }
 
 /** A production whole, as `viewer` may see it. */
-export function productionView(viewer: Actor, { production, stages, links, purchases }: WholeProduction): ProductionView {
+export function productionView(
+  viewer: Actor,
+  { production, stages, links, purchases }: WholeProduction,
+): ProductionView {
   const pieces = inOrder(production.pieces);
   const placeOf = new Map(pieces.map((piece, i) => [piece.id, i]));
   const inPieceOrder = [...stages].sort(

@@ -73,7 +73,10 @@ export class ProductionRepository {
     await this.manager.upsert(KeyDate, row, ['id']);
     if (!pieceIds) return;
     await this.manager.delete(KeyDatePiece, { keyDateId: keyDate.id });
-    await this.manager.insert(KeyDatePiece, pieceIds.map((pieceId) => ({ pieceId, keyDateId: keyDate.id })));
+    await this.manager.insert(
+      KeyDatePiece,
+      pieceIds.map((pieceId) => ({ pieceId, keyDateId: keyDate.id })),
+    );
   }
 
   async removeKeyDate(id: string): Promise<void> {

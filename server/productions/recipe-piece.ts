@@ -4,7 +4,7 @@ import { recipeAmountsFault, recipeFaults, type RecipeAmounts, type RecipeDraft 
 import type { StageDraft } from '@common/domain/stage-draft';
 import type { Bay, Link, Piece, Stage } from '@database/entities';
 import { invalidField } from '../http/problem';
-import { draftRow } from '../storage/drafts';
+import { draftRow } from '@database/draft-row';
 import type { PlaceRow, StageParts } from './stage-repository';
 
 /** The rows that a piece made from a recipe comes to. */
@@ -32,7 +32,7 @@ export function recipeRows(recipe: RecipeDraft, amounts: RecipeAmounts, piece: P
   }));
   const ids = expanded.stages.map(() => randomUUID());
   const stages = expanded.stages.map(({ draft, nth, of }, position) => ({
-    ...draftRow({ ...draft, crew: [], places: [], dwell: draft.dwell, cautions: [...draft.cautions] }),
+    ...draftRow(draft),
     id: ids[position],
     pieceId: piece.id,
     position,
@@ -42,7 +42,9 @@ export function recipeRows(recipe: RecipeDraft, amounts: RecipeAmounts, piece: P
   const parts = new Map(
     expanded.stages.map(({ draft, mould, untilStage }, i) => {
       const untilStageId = untilStage === null ? null : ids[untilStage];
-      const places: PlaceRow[] = draft.places.map(({ bayIds, units, hold }) => heldUntil({ bayIds, units, hold }, untilStageId));
+      const places: PlaceRow[] = draft.places.map(({ bayIds, units, hold }) =>
+        heldUntil({ bayIds, units, hold }, untilStageId),
+      );
       if (mould !== null) {
         const hold = untilStageId === null ? ('dwell' as const) : ('until-stage' as const);
         places.push({ bayIds: [moulds[mould].id], units: 1, hold, untilStageId });

@@ -14,7 +14,11 @@ export class SignOffs {
   constructor(private readonly transactions: Transactions) {}
 
   /** Approved ends the sign-off; changes asked leave it open, to be decided again. A client decides on their own productions. */
-  decide(actor: Actor, id: string, { decision, at, note, version }: z.output<typeof SignOffDecision>): Promise<StageView> {
+  decide(
+    actor: Actor,
+    id: string,
+    { decision, at, note, version }: z.output<typeof SignOffDecision>,
+  ): Promise<StageView> {
     return this.transactions.write(actor, async (unit) => {
       const repository = new StageRepository(unit.manager);
       const stage = await requireStage(repository, id);
@@ -22,7 +26,10 @@ export class SignOffs {
       if (actor.role === 'client' && stage.piece.production.clientId !== actor.clientId) throw notFound('stage');
       if (stage.kind !== 'sign-off') throw invalidField('', `${stageName(stage)} is not a sign-off.`);
       if (stage.state === 'finished') {
-        throw new Problem('already-exists', `${stageName(stage)} was approved already. Ask the studio for a variation.`);
+        throw new Problem(
+          'already-exists',
+          `${stageName(stage)} was approved already. Ask the studio for a variation.`,
+        );
       }
       const before = stageView(stage);
       requireVersion(stageViewFor(actor, stage), { version });

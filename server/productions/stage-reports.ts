@@ -56,7 +56,8 @@ export class StageReports {
     const crew = [...new Set(issued?.crew.map((member) => member.makerId))];
     const known = await repository.makersOn(id);
     const own = actor.makerId;
-    if (own !== null && !crew.includes(own)) await repository.setHands(id, [...new Set([...known, own])], issued?.bayIds ?? []);
+    if (own !== null && !crew.includes(own))
+      await repository.setHands(id, [...new Set([...known, own])], issued?.bayIds ?? []);
     else if (crew.length > 0) await repository.setHands(id, crew, issued?.bayIds ?? []);
   }
 }

@@ -74,7 +74,15 @@ export class StageRepository {
   /** Every stage that is not removed, in few words. */
   outline(): Promise<Pick<Stage, 'id' | 'name' | 'pieceId' | 'position' | 'nth' | 'repeats' | 'piece'>[]> {
     return this.manager.find(Stage, {
-      select: { id: true, name: true, pieceId: true, position: true, nth: true, repeats: true, piece: { id: true, name: true } },
+      select: {
+        id: true,
+        name: true,
+        pieceId: true,
+        position: true,
+        nth: true,
+        repeats: true,
+        piece: { id: true, name: true },
+      },
       relations: { piece: true },
       order: { position: 'ASC', id: 'ASC' },
     });
@@ -173,8 +181,14 @@ export class StageRepository {
   async setHands(stageId: string, makerIds: readonly string[], bayIds: readonly string[]): Promise<void> {
     await this.manager.delete(StageMaker, { stageId });
     await this.manager.delete(StageBay, { stageId });
-    await this.manager.insert(StageMaker, makerIds.map((makerId) => ({ stageId, makerId })));
-    await this.manager.insert(StageBay, bayIds.map((bayId, position) => ({ stageId, position, bayId })));
+    await this.manager.insert(
+      StageMaker,
+      makerIds.map((makerId) => ({ stageId, makerId })),
+    );
+    await this.manager.insert(
+      StageBay,
+      bayIds.map((bayId, position) => ({ stageId, position, bayId })),
+    );
   }
 
   makersOn(stageId: string): Promise<string[]> {

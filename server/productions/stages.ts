@@ -5,7 +5,8 @@ import { PLAIN_LINK } from '@common/domain/stage-draft';
 import { Link, Stage } from '@database/entities';
 import { invalidField, invalidFields, notFound, Problem } from '../http/problem';
 import type { Actor } from '../session';
-import { draftFaults, draftRow } from '../storage/drafts';
+import { draftRow } from '@database/draft-row';
+import { draftFaults } from '../storage/drafts';
 import { knownRecords } from '../storage/known-records';
 import type { Transactions } from '../storage/transactions';
 import type { Unit } from '../storage/unit';
@@ -74,7 +75,8 @@ export class Stages {
       const stage = await requireStage(repository, id);
       const before = stageView(stage);
       requireVersion(before, { version });
-      if (stage.state !== 'to-do') throw new Problem('still-in-use', `Work has begun on ${stageName(stage)}; it stays.`);
+      if (stage.state !== 'to-do')
+        throw new Problem('still-in-use', `Work has begun on ${stageName(stage)}; it stays.`);
       await requireUnneeded(repository, [id], stageName(stage));
       const bridges = bridgesOver(id, await repository.links());
       await repository.removeStages([id], unit.at);

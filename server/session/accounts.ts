@@ -26,7 +26,13 @@ export class Accounts {
     const passwordHash = password === null ? null : await hashPassword(password);
     return this.transactions.write(actor, async (unit) => {
       const accounts = new AccountRepository(unit.manager);
-      const account = unit.manager.create(Account, { ...fields, id: randomUUID(), passwordHash, active: true, version: 1 });
+      const account = unit.manager.create(Account, {
+        ...fields,
+        id: randomUUID(),
+        passwordHash,
+        active: true,
+        version: 1,
+      });
       await requireSound(unit, accounts, account);
       await accounts.save(account);
       const view = accountView(account);
@@ -51,7 +57,9 @@ export class Accounts {
       await accounts.save(account);
       if (passwordHash || !account.active) await accounts.endSessions(id, account.active ? ownSid : null);
       const view = accountView(account);
-      const what = [changedFields(before, view), ...(passwordHash ? ['password'] : [])].filter((it) => it !== 'nothing');
+      const what = [changedFields(before, view), ...(passwordHash ? ['password'] : [])].filter(
+        (it) => it !== 'nothing',
+      );
       const sentence = `Changed the account of ${account.name}: ${what.join(', ') || 'nothing'}.`;
       await unit.record({ action: 'changed', subject: { kind: 'account', id }, sentence, before, after: view });
       return view;
@@ -73,7 +81,8 @@ async function requireSound(unit: Unit, accounts: AccountRepository, account: Ac
     faults.push({ pointer: '/makerId', detail: 'There is no such maker.' });
   }
   if ((account.role === 'client') !== (account.clientId !== null)) {
-    const detail = account.role === 'client' ? 'Choose which client this person is.' : 'Only a client belongs to a client.';
+    const detail =
+      account.role === 'client' ? 'Choose which client this person is.' : 'Only a client belongs to a client.';
     faults.push({ pointer: '/clientId', detail });
   } else if (account.clientId !== null && !(await unit.manager.existsBy(Client, { id: account.clientId }))) {
     faults.push({ pointer: '/clientId', detail: 'There is no such client.' });

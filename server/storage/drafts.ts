@@ -1,50 +1,9 @@
 import type { z } from 'zod';
 import type { FieldFault, StageDraft } from '@common/contract';
 import { stageFaults } from '@common/domain/stage-rules';
-import type { DraftColumns } from '@database/entities';
+import type { DraftRow } from '@database/draft-row';
 
 type Draft = z.output<typeof StageDraft>;
-type DraftRow = Pick<
-  DraftColumns,
-  | 'name'
-  | 'kind'
-  | 'lowMinutes'
-  | 'likelyMinutes'
-  | 'highMinutes'
-  | 'crewLossPermille'
-  | 'continuity'
-  | 'dwellMinutes'
-  | 'dwellAttendedMinutes'
-  | 'dwellMaterialId'
-  | 'dwellMilestone'
-  | 'dwellWindow'
-  | 'cautions'
-  | 'note'
-  | 'visitAt'
-  | 'replyMinutes'
->;
-
-/** The columns of a draft; its crew and places are rows of their own. */
-export function draftRow(draft: Draft): DraftRow {
-  const { dwell, handsOn } = draft;
-  return {
-    name: draft.name,
-    kind: draft.kind,
-    ...handsOn,
-    crewLossPermille: draft.crewLossPermille,
-    continuity: draft.continuity,
-    dwellMinutes: dwell?.minutes ?? null,
-    dwellAttendedMinutes: dwell?.attendedMinutes ?? null,
-    dwellMaterialId: dwell?.materialId ?? null,
-    dwellMilestone: dwell?.milestone ?? null,
-    dwellWindow: dwell?.window ?? null,
-    cautions: draft.cautions,
-    note: draft.note,
-    visitAt: draft.visitAt === null ? null : new Date(draft.visitAt),
-    replyMinutes: draft.replyMinutes,
-  };
-}
-
 /** The draft that a row's columns say. */
 export function draftOf(row: DraftRow): Omit<Draft, 'crew' | 'places'> {
   const { lowMinutes, likelyMinutes, highMinutes } = row;

@@ -35,7 +35,10 @@ export class StudioService {
       studio.settings = { ...studio.settings, ...(settings && sentMembers(settings)) };
       await repository.saveStudio(studio);
       const after = studioView(studio);
-      const what = changedFields({ ...before, ...before.settings }, { ...after, ...after.settings, settings: before.settings });
+      const what = changedFields(
+        { ...before, ...before.settings },
+        { ...after, ...after.settings, settings: before.settings },
+      );
       const sentence = `Changed the studio: ${what}.`;
       await unit.record({ action: 'changed', subject: { kind: 'studio', id: studio.id }, sentence, before, after });
       return after;
@@ -43,9 +46,7 @@ export class StudioService {
   }
 
   closures(): Promise<ClosureView[]> {
-    return this.transactions.read(async (manager) =>
-      (await new StudioRepository(manager).closures()).map(closureView),
-    );
+    return this.transactions.read(async (manager) => (await new StudioRepository(manager).closures()).map(closureView));
   }
 
   createClosure(actor: Actor, fields: z.output<typeof ClosureCreate>): Promise<ClosureView> {
