@@ -2,7 +2,7 @@ import { freePort } from '@database/cluster/free-port';
 import { readAddress } from '../../server/launch/address';
 import { buildApplication } from '../../server/launch/build-application';
 import { startBuiltServer, type ServerProcess } from '../../server/launch/server-process';
-import { withDatabase, type TestDatabase } from './test-database';
+import { withDemoDatabase, type TestDatabase } from './test-database';
 
 /** The built application as `npm start` serves it. */
 export interface RunningStudio {
@@ -14,14 +14,14 @@ export interface RunningStudio {
 // The client may have to be built first, when the file is run by itself.
 const SET_UP_MS = 7 * 60_000;
 
-/** Serves the built application from a database of its own for the length of a file or a `describe`. */
+/** Serves the built application, with the demo studio in a database of its own, for the length of a file or a `describe`. */
 export function withRunningStudio(): RunningStudio {
   let running: { readonly url: string; readonly server: ServerProcess } | undefined;
   // Jest ends things in the order of their mention: first the server, then the database under it.
   afterAll(async () => {
     await running?.server.stop();
   });
-  const database = withDatabase();
+  const database = withDemoDatabase();
   beforeAll(async () => {
     await buildApplication();
     const { url, host, port } = readAddress({ PORT: String(await freePort()) });

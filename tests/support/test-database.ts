@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { createDataSource } from '@database/data-source';
+import { seedDemo } from '@database/demo/seed';
 import { Client, escapeIdentifier } from 'pg';
 import { type DataSource } from 'typeorm';
 import { TEST_CLUSTER_URL } from './test-cluster';
@@ -11,21 +12,39 @@ export interface TestDatabase {
   readonly dataSource: DataSource;
 }
 
-const TEMPLATE = 'fettle_template';
-const SET_UP_MS = 60_000;
-// Any number, the same in every test process: one of them makes the template while the others wait.
+/** What a database is copied from: made once a run, by whichever test file needs it first. */
+interface Template {
+  readonly name: string;
+  /** Fills the migrated database that becomes the template. */
+  readonly fill: (dataSource: DataSource) => Promise<unknown>;
+}
+
+const EMPTY: Template = { name: 'fettle_template_empty', fill: () => Promise.resolve() };
+const DEMO: Template = { name: 'fettle_template_demo', fill: (dataSource) => seedDemo(dataSource, new Date()) };
+
+const SET_UP_MS = 120_000;
+// Any number, the same in every test process: one of them makes a template while the others wait.
 const TEMPLATE_LOCK = 4300;
 
 /**
- * Gives a test file an empty, migrated database, copied from a template that is made once a run, and drops it at the
- * end. Call it at the top of the file or of a `describe`; read it inside the tests.
+ * Gives a test file an empty, migrated database and drops it at the end. Call it at the top of the file or of a
+ * `describe`; read it inside the tests.
  */
 export function withDatabase(): TestDatabase {
+  return copied(EMPTY);
+}
+
+/** The same, with the demo studio in it, as it stands today. */
+export function withDemoDatabase(): TestDatabase {
+  return copied(DEMO);
+}
+
+function copied(template: Template): TestDatabase {
   const name = `test_${randomUUID().replaceAll('-', '')}`;
   const url = urlOf(name);
   let dataSource: DataSource | undefined;
   beforeAll(async () => {
-    await copyTemplate(name);
+    await copyTemplate(template, name);
     dataSource = await createDataSource(url).initialize();
   }, SET_UP_MS);
   afterAll(async () => {
@@ -42,26 +61,27 @@ export function withDatabase(): TestDatabase {
   };
 }
 
-async function copyTemplate(name: string): Promise<void> {
+async function copyTemplate(template: Template, name: string): Promise<void> {
   await onServer(async (client) => {
     await client.query('select pg_advisory_lock($1)', [TEMPLATE_LOCK]);
-    const found = await client.query('select 1 from pg_database where datname = $1', [TEMPLATE]);
-    if (found.rowCount === 0) await makeTemplate(client);
-    await client.query(`create database ${escapeIdentifier(name)} template ${escapeIdentifier(TEMPLATE)}`);
+    const found = await client.query('select 1 from pg_database where datname = $1', [template.name]);
+    if (found.rowCount === 0) await makeTemplate(client, template);
+    await client.query(`create database ${escapeIdentifier(name)} template ${escapeIdentifier(template.name)}`);
   });
 }
 
-async function makeTemplate(client: Client): Promise<void> {
-  const making = `${TEMPLATE}_making`;
+async function makeTemplate(client: Client, { name, fill }: Template): Promise<void> {
+  const making = `${name}_making`;
   await client.query(`drop database if exists ${making} with (force)`);
   await client.query(`create database ${making}`);
   const dataSource = await createDataSource(urlOf(making)).initialize();
   try {
     await dataSource.runMigrations();
+    await fill(dataSource);
   } finally {
     await dataSource.destroy();
   }
-  await client.query(`alter database ${making} rename to ${TEMPLATE}`);
+  await client.query(`alter database ${making} rename to ${name}`);
 }
 
 /** Runs work on the server's own database; closing the session gives back the lock. */
