@@ -1,4 +1,4 @@
-import express, { type Express } from 'express';
+import express, { type Express, type RequestHandler } from 'express';
 import type { DataSource } from 'typeorm';
 import type { Config } from './config';
 import { mountFeatures } from './features';
@@ -48,7 +48,14 @@ export function createApp(parts: AppParts): Express {
   mountHealth(app, dataSource, readiness);
 
   const passport = createPassport(dataSource.manager);
-  app.use('/api', noStore, limitRequests(config.limits), sessions.middleware, passport.session(), jsonBody());
+  app.use(
+    '/api',
+    noStore,
+    limitRequests(config.limits),
+    sessions.middleware,
+    passport.session() as RequestHandler,
+    jsonBody(),
+  );
   mountLive(app, live, sessions.store);
   const api = new Api(config.publicUrl);
   mountFeatures({ ...parts, api, app, passport });

@@ -1,5 +1,5 @@
 import { In, Not, type EntityManager } from 'typeorm';
-import { IssuedEntry, Link, Production, Stage } from '@database/entities';
+import { IssuedEntry, Link, Production, type Stage } from '@database/entities';
 
 /** What a client's page is made from, through one manager. */
 export class ClientPageRepository {

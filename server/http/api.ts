@@ -1,5 +1,5 @@
 import { Router, type Request, type RequestHandler, type Response } from 'express';
-import type { Endpoint, Role } from '@common/contract';
+import type { Endpoint } from '@common/contract';
 import type { z } from 'zod';
 import type { Actor } from '../session/actor';
 import { refuseForeignRequest } from './form-token';
@@ -101,7 +101,7 @@ export class Api {
 
 function requireAudience(who: Endpoint['who'], actor: Actor | null): Actor {
   if (actor === null) throw new Problem('not-signed-in', 'Sign in to go on.');
-  if (who !== 'anyone' && !(who as readonly Role[]).includes(actor.role)) {
+  if (who !== 'anyone' && !who.includes(actor.role)) {
     throw new Problem('not-allowed', `This is not for a ${actor.role}.`);
   }
   return actor;

@@ -9,6 +9,9 @@ import { readDesk, type Desk } from './desk';
 /** A margin below this much working time is called close: two days of eight hours. */
 const CLOSE_MINUTES = 960;
 
+/** Reasons that another order of work could do away with. */
+const CAN_BE_CHANGED: ReadonlySet<string> = new Set(['crew-busy', 'bay-taken']);
+
 type KeyDate = Problem['keyDates'][number];
 type Chain = ReturnType<typeof drivingChain>;
 
@@ -59,7 +62,8 @@ function riskOf(desk: Desk, keyDate: KeyDate, ready: number | null): DateRisk {
 function sayDate({ names, format }: Desk, chain: Chain, ready: number, marginMinutes: number): string {
   const length = formatMinutes(Math.abs(marginMinutes));
   const when = marginMinutes < 0 ? `${length} too late` : `${length} in time`;
-  const cause = chain.steps.at(-1);
+  // What people or bays make it wait for can be changed; else the first cause says most.
+  const cause = chain.steps.find(({ because }) => CAN_BE_CHANGED.has(because.kind)) ?? chain.steps.at(-1);
   if (!cause) return `Ready ${format(ready)}, ${when}.`;
   return `Ready ${format(ready)}, ${when}. It hangs on ${names.stage(cause.stageId)}: ${sayReason(cause.because, names, format)}.`;
 }

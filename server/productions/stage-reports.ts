@@ -1,7 +1,7 @@
 import type { EntityManager } from 'typeorm';
 import type { z } from 'zod';
 import type { StageReport as StageReportSchema, StageView } from '@common/contract';
-import { IssuedEntry, Stage, StageReport } from '@database/entities';
+import { IssuedEntry, type Stage, type StageReport } from '@database/entities';
 import { invalidField, Problem } from '../http/problem';
 import type { Actor } from '../session';
 import type { Transactions } from '../storage/transactions';

@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import type { z } from 'zod';
 import type { FieldFault, StageChange, StageCreate, StageDraft, StageView } from '@common/contract';
 import { PLAIN_LINK } from '@common/domain/stage-draft';
-import { Link, Stage } from '@database/entities';
+import { type Link, type Stage } from '@database/entities';
 import { invalidField, invalidFields, notFound, Problem } from '../http/problem';
 import type { Actor } from '../session';
 import { draftRow } from '@database/draft-row';

@@ -16,7 +16,7 @@ export type Authenticator = InstanceType<typeof Passport>;
 export function createPassport(manager: EntityManager): Authenticator {
   const accounts = new AccountRepository(manager);
   const passport = new Passport();
-  passport.serializeUser<string>((user, done) => done(null, (user as Actor).accountId));
+  passport.serializeUser<string>((user, done) => done(null, user.accountId));
   // Read anew with each request, so that a closed account or a new role counts at once.
   passport.deserializeUser<string>((id, done) => {
     accounts.byId(id).then(
@@ -50,7 +50,7 @@ export function authenticateByPassword(
 ): Promise<Actor | null> {
   return new Promise((resolve, reject) => {
     const decide = (error: unknown, actor: Actor | false | null) => {
-      if (error) reject(error instanceof Error ? error : new Error(String(error)));
+      if (error) reject(asError(error));
       else resolve(actor || null);
     };
     const middleware = passport.authenticate('local', decide) as (...given: unknown[]) => void;
@@ -62,7 +62,7 @@ export function authenticateByPassword(
 export async function beginSession(transactions: Transactions, request: Request, actor: Actor): Promise<void> {
   await new Promise<void>((resolve, reject) => {
     request.logIn(actor, (error: unknown) => {
-      if (error) reject(error instanceof Error ? error : new Error(String(error)));
+      if (error) reject(asError(error));
       else resolve();
     });
   });
@@ -80,8 +80,12 @@ export async function beginSession(transactions: Transactions, request: Request,
 export function endSession(request: Request): Promise<void> {
   return new Promise((resolve, reject) => {
     request.logOut((error: unknown) => {
-      if (error) reject(error instanceof Error ? error : new Error(String(error)));
+      if (error) reject(asError(error));
       else resolve();
     });
   });
+}
+
+function asError(thrown: unknown): Error {
+  return thrown instanceof Error ? thrown : new Error('Signing in or out failed.', { cause: thrown });
 }
