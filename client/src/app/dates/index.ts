@@ -1,5 +1,6 @@
 import type { Routes } from '@angular/router';
+import { DatesPage } from './dates-page';
 
 /** The addresses below /dates. */
-const routes: Routes = [];
+const routes: Routes = [{ path: '', component: DatesPage }];
 export default routes;

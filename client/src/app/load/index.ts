@@ -1,5 +1,6 @@
 import type { Routes } from '@angular/router';
+import { LoadPage } from './load-page';
 
 /** The addresses below /load. */
-const routes: Routes = [];
+const routes: Routes = [{ path: '', component: LoadPage }];
 export default routes;

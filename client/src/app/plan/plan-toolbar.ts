@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, output } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-toggle';
 import { MatTooltip } from '@angular/material/tooltip';
@@ -35,6 +35,8 @@ export class PlanToolbar {
   protected readonly plan = inject(PlanStore);
   protected readonly board = inject(BoardStore);
 
+  readonly small = input(false);
+  readonly levelState = input<'none' | 'under-way' | 'found'>('none');
   readonly level = output();
   readonly evenOut = output();
   readonly issue = output();
@@ -55,6 +57,9 @@ export class PlanToolbar {
       : `same as issued plan ${view.issued.number}`;
     return `${changed} · ${issued}`;
   });
+  protected readonly levelWord = computed(
+    () => ({ none: 'Level', 'under-way': 'Levelling…', found: 'See what was found' })[this.levelState()],
+  );
   protected readonly unmetCount = computed(() => this.plan.view()?.unmet.length ?? 0);
 
   protected zoomTo(name: ZoomName): void {

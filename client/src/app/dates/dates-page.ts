@@ -1,0 +1,65 @@
+import { ChangeDetectionStrategy, Component, computed } from '@angular/core';
+import { endpoints } from '@common/contract';
+import { onLiveEvent, readEndpoint } from '../api';
+import { PageHeading } from '../ui/page-heading';
+import { StatePanel } from '../ui/state-panel';
+import { DateCard } from './date-card';
+
+/** Every key date ahead: its margin, how it stands, and what leads to it. */
+@Component({
+  selector: 'fettle-dates-page',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  imports: [DateCard, PageHeading, StatePanel],
+  template: `
+    <div class="page">
+      <fettle-page-heading title="Dates" [lead]="lead()" />
+      <fettle-state-panel
+        [read]="dates"
+        emptyTitle="No key dates ahead"
+        emptyHint="Give a production its delivery or its technical rehearsal, and it shows here with what leads to it."
+      >
+        <div class="cards">
+          @for (risk of dates.value(); track risk.keyDateId) {
+            <fettle-date-card [risk]="risk" [productions]="byId()" />
+          }
+        </div>
+      </fettle-state-panel>
+    </div>
+  `,
+  styles: `
+    .cards {
+      display: grid;
+      gap: var(--space-4);
+      grid-template-columns: repeat(auto-fill, minmax(min(26rem, 100%), 1fr));
+      align-items: start;
+    }
+  `,
+})
+export class DatesPage {
+  protected readonly dates = readEndpoint(endpoints.readDates);
+  private readonly productions = readEndpoint(endpoints.listProductions);
+  protected readonly byId = computed(() => new Map(this.productions.value()?.map((one) => [one.id, one])));
+  protected readonly lead = computed(() => {
+    const dates = this.dates.value();
+    if (!dates) return '';
+    const count = (state: string): number => dates.filter((one) => one.state === state).length;
+    const parts = [
+      count('missed') > 0 ? `${count('missed')} late` : '',
+      count('close') > 0 ? `${count('close')} close` : '',
+      count('unplanned') > 0 ? `${count('unplanned')} not planned yet` : '',
+    ].filter((part) => part !== '');
+    return parts.length > 0
+      ? `Of ${dates.length} ahead: ${parts.join(', ')}.`
+      : `All ${dates.length} ahead are in time as the plan stands.`;
+  });
+
+  constructor() {
+    onLiveEvent((event) => {
+      if (event === null || event.kind === 'plan-revised') this.dates.reload();
+      if (event === null || event.kind === 'record-changed') {
+        this.dates.reload();
+        this.productions.reload();
+      }
+    });
+  }
+}
