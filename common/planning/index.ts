@@ -28,3 +28,5 @@ export type { PlanChange } from './explain/plan-change';
 export type { Names, FormatInstant } from './explain/names';
 export { craftLoad, makerLoad, bayLoad } from './load/load';
 export type { LoadRow } from './load/load';
+export { NO_DRIVER, Replay } from './construct/replay';
+export { Chance } from './improve/chance';
