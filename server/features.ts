@@ -6,6 +6,7 @@ import { DaySheets, mountDaySheets } from './day-sheets';
 import { mountFeeds } from './feeds';
 import { mountImport } from './import';
 import { Materials, mountLibrary, Recipes } from './library';
+import { mountOpenApi } from './openapi';
 import { createPlanningParts, mountPlanning } from './planning';
 import { createProductionParts, mountProductions } from './productions';
 import { Accounts, mountGoogle, mountSession } from './session';
@@ -30,4 +31,5 @@ export function mountFeatures(parts: FeatureParts): void {
   mountDaySheets(api, new DaySheets(transactions));
   mountImport(api, transactions);
   mountFeeds({ ...parts, publicUrl: parts.config.publicUrl });
+  mountOpenApi(parts.app);
 }
