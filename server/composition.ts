@@ -25,7 +25,11 @@ export interface Running {
 }
 
 /** Makes everything and connects it. The database has to be at the present schema. */
-export async function compose(config: Config, log: Log = createLog(config.logLevel)): Promise<Running> {
+export async function compose(
+  config: Config,
+  log: Log = createLog(config.logLevel),
+  clock: () => Date = () => new Date(),
+): Promise<Running> {
   const dataSource = await createDataSource(config.databaseUrl).initialize();
   const sessionPool = new Pool({
     connectionString: config.databaseUrl,
@@ -37,7 +41,7 @@ export async function compose(config: Config, log: Log = createLog(config.logLev
   const sessions = keepSessions(config, sessionPool, log, 'hourly');
   const live = new LiveHub(config.databaseUrl, log, new ProcessMark());
   await live.start();
-  const transactions = new Transactions(dataSource, log, () => new Date());
+  const transactions = new Transactions(dataSource, log, clock);
   const levelPool = new LevelPool(config.levelWorkers ?? undefined);
   const levelRuns = new LevelRuns(transactions, levelPool, live, log);
   await levelRuns.failLeftBehind();
