@@ -12,6 +12,7 @@ import { Budget } from '../stop/budget';
 import { evenOut } from './even-out';
 import type { LevelOptions } from './level-options';
 import { StudioSearch } from './search-studio';
+import { levelTimed } from './timed/level-timed';
 
 /** Schedules spent on laying out a part where exact search found no whole plan. */
 const SALVAGE_SCHEDULES = 20;
@@ -35,6 +36,8 @@ export function level(problem: Problem, options: LevelOptions): LevelResult {
 
 function levelBySearch(problem: Problem, options: LevelOptions): LevelResult {
   const compiled = compile(problem);
+  const timed = levelTimed(compiled, options);
+  if (timed) return timed;
   const searchBudget = new Budget(Math.max(1, Math.floor(options.maxSchedules * EVEN_SHARE)), options.shouldStop);
   let bound: LevelResult['bound'] = noBound();
   const tell = (): void => {
