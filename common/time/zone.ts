@@ -34,15 +34,34 @@ export function localOfInstant(instant: Minute, zone: string): LocalMinute {
 /**
  * The instant at which the clock on the wall reads `local`. Where clocks go back and the reading comes twice, the first; where
  * they go forward and it never comes, the reading that the offset before the gap gives (02:30 becomes 03:30). That is the rule
- * of RFC 5545 section 3.3.5, form 3. It assumes that a zone does not change its clocks twice within two days.
+ * of RFC 5545 section 3.3.5, form 3. It assumes that a zone does not change its clocks twice within three days.
  */
 export function instantOfLocal(local: LocalMinute, zone: string): Minute {
-  const before = offsetMinutes(local - MINUTES_PER_DAY, zone);
-  const after = offsetMinutes(local + MINUTES_PER_DAY, zone);
+  const day = Math.floor(local / MINUTES_PER_DAY);
+  const before = offsetAtMidnight(day - 1, zone);
+  const after = offsetAtMidnight(day + 2, zone);
   const byBefore = local - before;
   if (before === after || offsetMinutes(byBefore, zone) === before) {
     return byBefore;
   }
   const byAfter = local - after;
   return offsetMinutes(byAfter, zone) === after ? byAfter : byBefore;
+}
+
+/** Offsets at midnight UTC by zone and day: asking the platform takes microseconds, and patterns ask for every day of a year. */
+const offsetsByZone = new Map<string, Map<number, number>>();
+const MOST_DAYS_KEPT = 20_000;
+
+function offsetAtMidnight(day: number, zone: string): number {
+  let offsets = offsetsByZone.get(zone);
+  if (!offsets || offsets.size > MOST_DAYS_KEPT) {
+    offsets = new Map();
+    offsetsByZone.set(zone, offsets);
+  }
+  let offset = offsets.get(day);
+  if (offset === undefined) {
+    offset = offsetMinutes(day * MINUTES_PER_DAY, zone);
+    offsets.set(day, offset);
+  }
+  return offset;
 }

@@ -13,7 +13,7 @@ const SETTINGS: DemoSettings = {
   changePenaltyMinor: 500,
   unevennessWeight: 1,
   earlinessWeight: 1,
-  freezeMinutes: 0,
+  freezeMinutes: 24 * 60,
   restBetweenMinutes: 11 * 60,
   dayLimitMinutes: 10 * 60,
   weekLimitMinutes: 48 * 60,

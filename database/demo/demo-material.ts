@@ -10,7 +10,9 @@ export interface DemoMaterial extends MaterialDraft {
 /** Where no published figure was found: what workshops reckon with. Overwrite it from the sheet of the product in use. */
 export const USUAL_PRACTICE = 'Usual practice, no source';
 
+/** A time that the room does not move. */
 export const NO_LAW: DwellLaw = { kind: 'none' };
+/** Drying by the air’s warmth and dryness. */
 export const BY_AIR: DwellLaw = { kind: 'evaporation' };
 
 /** Ten degrees more divide the time by `factor`. */

@@ -52,9 +52,10 @@ function materialOf(material: DemoMaterial): StudioSnapshot['materials'][number]
   const { id, referenceCelsius, referenceHumidityPercent, dwells } = material;
   return {
     id,
-    milestones: dwells.map(({ milestone, law, minimumCelsius, maximumCelsius }) => ({
+    milestones: dwells.map(({ milestone, minutes, law, minimumCelsius, maximumCelsius }) => ({
       milestone,
       behaviour: { law, referenceCelsius, referenceHumidityPercent, minimumCelsius, maximumCelsius },
+      minutes,
     })),
   };
 }

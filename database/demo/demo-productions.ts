@@ -21,6 +21,7 @@ export interface ProductionPlan {
   readonly pieces: readonly PiecePlan[];
 }
 
+/** A key date as a weekday from today. */
 export interface DatePlan {
   readonly kind: KeyDateKind;
   readonly workday: number;
@@ -31,6 +32,7 @@ export interface DatePlan {
   readonly pieces?: readonly string[];
 }
 
+/** A piece: what it is made from, how large, and how far it has come. */
 export interface PiecePlan {
   readonly key: string;
   readonly name: string;

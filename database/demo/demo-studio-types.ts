@@ -40,20 +40,24 @@ export interface DemoSettings extends PlanningSettings {
   readonly roomHumidityPercent: number;
 }
 
+/** Days on which nobody works. */
 export interface DemoClosure {
   readonly id: string;
   readonly name: string;
   readonly days: DayRange;
 }
 
+/** A craft with its key among the ids. */
 export interface DemoCraft extends Craft {
   readonly id: string;
 }
 
+/** A recipe of the library. */
 export interface DemoRecipe extends RecipeDraft {
   readonly id: string;
 }
 
+/** A maker with crafts, weeks and leave. */
 export interface DemoMaker {
   readonly id: string;
   readonly name: string;
@@ -67,6 +71,7 @@ export interface DemoMaker {
   readonly note: string;
 }
 
+/** A bay, or the mould of a piece. */
 export interface DemoBay {
   readonly id: string;
   readonly name: string;
@@ -80,11 +85,13 @@ export interface DemoBay {
   readonly note: string;
 }
 
+/** Who a production is made for. */
 export interface DemoClient {
   readonly id: string;
   readonly name: string;
 }
 
+/** A production with its key dates. */
 export interface DemoProduction {
   readonly id: string;
   readonly name: string;
@@ -98,6 +105,7 @@ export interface DemoProduction {
   readonly keyDates: readonly DemoKeyDate[];
 }
 
+/** A date by which pieces have to be ready. */
 export interface DemoKeyDate {
   readonly id: string;
   readonly kind: KeyDateKind;
@@ -108,6 +116,7 @@ export interface DemoKeyDate {
   readonly pieceIds: readonly string[];
 }
 
+/** A piece, in its place among those of its production. */
 export interface DemoPiece {
   readonly id: string;
   readonly productionId: string;
@@ -117,6 +126,7 @@ export interface DemoPiece {
   readonly note: string;
 }
 
+/** A stage of a piece, and what has happened to it. */
 export interface DemoStage extends StageDraft {
   readonly id: string;
   readonly pieceId: string;
@@ -136,11 +146,13 @@ export interface DemoStage extends StageDraft {
   readonly decision: 'approved' | null;
 }
 
+/** One stage after another. */
 export interface DemoLink extends LinkDraft {
   readonly fromStageId: string;
   readonly toStageId: string;
 }
 
+/** A bought-in part and the stage that needs it. */
 export interface DemoPurchase {
   readonly id: string;
   readonly productionId: string;
@@ -154,6 +166,7 @@ export interface DemoPurchase {
   readonly costMinor: number;
 }
 
+/** A person who may sign in. */
 export interface DemoAccount {
   readonly id: string;
   readonly name: string;

@@ -7,6 +7,7 @@ const PRIMER_SHEET = 'Data sheet at idoc.tips, red-oxide primer; mas-paints.com 
 /** As a polyester gel, between laboratory and field charts. */
 const POLYESTER_FILLER = perTenDegrees(2.5);
 
+/** Fillers, primers, paints, varnishes and glues. */
 export const COATINGS: readonly DemoMaterial[] = [
   material(
     'body-filler',

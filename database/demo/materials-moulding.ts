@@ -7,6 +7,7 @@ const CONDENSATION_CURE = perTenDegrees(1.5);
 /** ASTM C1074: about 40 to 45 kJ/mol for plain cement, E/R near 5000 K. */
 const CEMENT = arrhenius(41.57);
 
+/** What moulds and casts are made of, resins apart. */
 export const MOULDING_MATERIALS: readonly DemoMaterial[] = [
   material(
     'silicone-tin',

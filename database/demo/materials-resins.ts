@@ -20,6 +20,7 @@ const EPOXY_FULL_SOURCE = 'Seven days at 20 °C, nilsmalmgren.com/technical/glos
 /** No numeric table found; doubling from memory. */
 const POLYURETHANE = perTenDegrees(2);
 
+/** Laminating, casting and foaming resins. */
 export const RESINS: readonly DemoMaterial[] = [
   material(
     'polyester',

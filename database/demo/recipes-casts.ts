@@ -1,5 +1,6 @@
 import { at, demoRecipe, keeping } from './demo-recipe';
 
+/** A set laid up from a few moulds. */
 export const CAST_BRACKETS = demoRecipe(
   'cast-brackets',
   {
@@ -82,6 +83,7 @@ export const CAST_BRACKETS = demoRecipe(
   ],
 );
 
+/** Small things poured. */
 export const RESIN_CASTS = demoRecipe(
   'resin-casts',
   {
@@ -135,6 +137,7 @@ export const RESIN_CASTS = demoRecipe(
   ],
 );
 
+/** Panels pressed and dried. */
 export const RELIEF = demoRecipe(
   'relief',
   {
@@ -193,6 +196,7 @@ export const RELIEF = demoRecipe(
   ],
 );
 
+/** Thin concrete, cured wet. */
 export const CONCRETE_BASIN = demoRecipe(
   'concrete-basin',
   {

@@ -1,6 +1,7 @@
 import { at, demoRecipe, keeping } from './demo-recipe';
 import { VARNISH } from './recipes-shells';
 
+/** A deck that people stand on. */
 export const ROSTRUM = demoRecipe(
   'rostrum',
   {
@@ -96,6 +97,7 @@ export const ROSTRUM = demoRecipe(
   ],
 );
 
+/** A frame finished soft. */
 export const UPHOLSTERED = demoRecipe(
   'upholstered',
   {
@@ -134,6 +136,7 @@ export const UPHOLSTERED = demoRecipe(
   ],
 );
 
+/** A painted cloth. */
 export const BACKCLOTH = demoRecipe(
   'backcloth',
   {
@@ -180,6 +183,7 @@ export const BACKCLOTH = demoRecipe(
   ],
 );
 
+/** A light figure to be carried. */
 export const PAPER_FIGURE = demoRecipe(
   'paper-figure',
   {

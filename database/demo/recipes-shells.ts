@@ -32,6 +32,7 @@ const PAINTED: readonly Step[] = [
   { key: 'detail', name: 'Paint the detail and break it down', hours: [0.8, 1.2, 2], crew: ['painting'] },
 ];
 
+/** A large free form. */
 export const CARVED_SHELL = demoRecipe(
   'carved-shell',
   {
@@ -107,6 +108,7 @@ export const CARVED_SHELL = demoRecipe(
   ],
 );
 
+/** A piece that hangs over people. */
 export const FLOWN = demoRecipe(
   'flown-piece',
   {
@@ -176,6 +178,7 @@ export const FLOWN = demoRecipe(
   ],
 );
 
+/** A piece that comes back. */
 export const REFURBISHED = demoRecipe(
   'refurbished',
   {
