@@ -25,8 +25,8 @@ const figure = (...rules: ReturnType<typeof Validators.min>[]): FormControl<numb
   imports: [FigureField, MatButton, Notice, StatePanel, TextField],
   templateUrl: './studio-board.html',
   styles: `
-    section + section {
-      margin-top: var(--space-4);
+    form {
+      gap: var(--space-4);
     }
   `,
 })

@@ -7,7 +7,9 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
   template: `
     <div class="words">
       <ng-content select="[above]" />
-      <h1><ng-content select="[before]" />{{ title() }}</h1>
+      <h1>
+        <ng-content select="[before]" /><span>{{ title() }}</span>
+      </h1>
       @if (lead()) {
         <p class="quiet">{{ lead() }}</p>
       }
@@ -29,6 +31,9 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
       max-width: 46rem;
     }
     h1 {
+      display: flex;
+      gap: 0.4em;
+      align-items: center;
       overflow-wrap: anywhere;
     }
     .actions {

@@ -69,6 +69,17 @@ import { Notice } from './notice';
       border: 1px dashed var(--rule-strong);
       border-radius: 6px;
     }
+    /* On a board of its own it needs no second frame. */
+    :host-context(.board) .empty {
+      padding: var(--space-1) 0;
+      border: 0;
+    }
+    :host-context(.board) h2 {
+      font-size: 1rem;
+    }
+    :host-context(.board) .loading {
+      padding: var(--space-2) 0;
+    }
     .retry {
       display: flex;
       flex-wrap: wrap;

@@ -21,8 +21,8 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
       content: '';
       position: absolute;
       inset-inline: -0.14em -0.1em;
-      top: 0.335em;
-      height: 0.115em;
+      top: 0.43em;
+      height: 0.1em;
       background: var(--oxide);
     }
   `,

@@ -68,6 +68,12 @@ export class ImportDialog {
     }
   }
 
+  /** The column that a fault is in; a dash where it is of the row or of the whole table. */
+  protected columnOf(pointer: string): string {
+    const last = pointer.split('/').at(-1) ?? '';
+    return last === '' || last === 'csv' ? '–' : last;
+  }
+
   protected async send(mode: 'try' | 'take'): Promise<void> {
     const csv = this.text.value;
     if (csv.trim() === '') {

@@ -42,7 +42,7 @@ export interface PieceDialogData {
           <p class="quiet small">{{ known.makes }}</p>
         }
         <div class="fields">
-          <fettle-figure-field label="Size" [unit]="known.sizeUnit" [reader]="decimal" [control]="form.controls.size" />
+          <fettle-figure-field [label]="'Size, ' + known.sizeUnit" [reader]="decimal" [control]="form.controls.size" />
           <fettle-figure-field label="Casts" [control]="form.controls.casts" />
           <fettle-figure-field label="Moulds" [control]="form.controls.moulds" />
           <fettle-figure-field label="Coats" [control]="form.controls.coats" />

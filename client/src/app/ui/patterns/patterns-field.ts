@@ -47,7 +47,7 @@ import { WEEKDAYS } from './say-rule';
             hideMultipleSelectionIndicator
           >
             @for (day of weekdays; track day.code) {
-              <mat-button-toggle [value]="day.code" [aria-label]="day.name">{{ day.short }}</mat-button-toggle>
+              <mat-button-toggle [value]="day.code">{{ day.short }}</mat-button-toggle>
             }
           </mat-button-toggle-group>
         }
