@@ -159,7 +159,9 @@ describe('beside a general-purpose library', () => {
 
   function daysByIcal(rule: string, first: string, until: string): string[] {
     const found: string[] = [];
-    const occurrences = ICAL.Recur.fromString(rule).iterator(ICAL.Time.fromJSDate(new Date(`${first}T09:00:00Z`), true));
+    const occurrences = ICAL.Recur.fromString(rule).iterator(
+      ICAL.Time.fromJSDate(new Date(`${first}T09:00:00Z`), true),
+    );
     for (let next = occurrences.next(); next; next = occurrences.next()) {
       const day = next.toString().slice(0, 10);
       if (day >= until) {
