@@ -83,6 +83,7 @@ const snapshot = (given: Partial<StudioSnapshot> = {}): StudioSnapshot => ({
       milestones: [
         {
           milestone: 'demould',
+          minutes: { low: 600, likely: 720, high: 1440 },
           behaviour: {
             law: { kind: 'factor-per-10-degrees', factor: 2 },
             referenceCelsius: 20,

@@ -82,6 +82,8 @@ export interface SnapshotMaterial {
 export interface SnapshotMilestone {
   readonly milestone: string;
   readonly behaviour: DwellBehaviour;
+  /** Least, likeliest and greatest minutes at the reference climate. */
+  readonly minutes: { readonly low: number; readonly likely: number; readonly high: number };
 }
 
 /** A production with its key dates. `delivered` and `declined` ones leave the plan. */

@@ -23,10 +23,13 @@ export function snapshotOf(rows: StudioRows, pins: Pins): StudioSnapshot {
     bays: rows.bays.filter((bay) => bay.active).map((bay) => bayOf(bay, room)),
     materials: rows.materials.map(({ id, dwells, referenceCelsius, referenceHumidityPercent }) => ({
       id,
-      milestones: inOrder(dwells).map(({ milestone, law, minimumCelsius, maximumCelsius }) => ({
-        milestone,
-        behaviour: { law, referenceCelsius, referenceHumidityPercent, minimumCelsius, maximumCelsius },
-      })),
+      milestones: inOrder(dwells).map(
+        ({ milestone, law, minimumCelsius, maximumCelsius, lowMinutes, likelyMinutes, highMinutes }) => ({
+          milestone,
+          behaviour: { law, referenceCelsius, referenceHumidityPercent, minimumCelsius, maximumCelsius },
+          minutes: { low: lowMinutes, likely: likelyMinutes, high: highMinutes },
+        }),
+      ),
     })),
     productions: rows.productions.map(({ id, state, keyDates }) => ({
       id,

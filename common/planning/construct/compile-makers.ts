@@ -10,10 +10,10 @@ import type { CompiledMakers } from './compiled';
 export function compileMakers(problem: Problem, makers: readonly Maker[]): CompiledMakers {
   const { start: origin, end } = problem.horizon;
   const weeks = Int32Array.from(problem.days, weekOf);
-  const ordinary = makers.map((maker) => new Calendar(maker.shifts, origin, end - origin));
+  const ordinary = makers.map((maker) => Calendar.of(maker.shifts, origin, end - origin));
   const extended = makers.map((maker) => {
     const overtime = maker.limits ? overtimeWithinLimits(problem.days, maker, weeks) : maker.overtime;
-    return new Calendar([...maker.shifts, ...overtime], origin, end - origin);
+    return Calendar.of([...maker.shifts, ...overtime], origin, end - origin);
   });
   return {
     ordinary,
@@ -36,7 +36,8 @@ function overtimeWithinLimits(days: readonly StudioDay[], maker: Maker, weeks: I
   days.forEach((day, d) => {
     const restedFrom = lastEnd + limits.restBetweenMinutes;
     let left = Math.min(limits.dayMinutes - minutesWithin(shifts, day), weekLeft.get(weeks[d]) ?? 0);
-    for (; nextShift < shifts.length && shifts[nextShift].start < day.end; nextShift += 1) lastEnd = Math.max(lastEnd, shifts[nextShift].end);
+    for (; nextShift < shifts.length && shifts[nextShift].start < day.end; nextShift += 1)
+      lastEnd = Math.max(lastEnd, shifts[nextShift].end);
     const restFrom = (shifts[nextShift]?.start ?? Infinity) - limits.restBetweenMinutes;
     while (nextOvertime < overtime.length && overtime[nextOvertime].end <= day.start) nextOvertime += 1;
     for (let i = nextOvertime; i < overtime.length && overtime[i].start < day.end; i += 1) {
@@ -52,7 +53,12 @@ function overtimeWithinLimits(days: readonly StudioDay[], maker: Maker, weeks: I
   return kept;
 }
 
-function weekAllowances(days: readonly StudioDay[], maker: Maker, weekMinutes: number, weeks: Int32Array): Map<number, number> {
+function weekAllowances(
+  days: readonly StudioDay[],
+  maker: Maker,
+  weekMinutes: number,
+  weeks: Int32Array,
+): Map<number, number> {
   const left = new Map<number, number>();
   days.forEach((day, d) => left.set(weeks[d], (left.get(weeks[d]) ?? weekMinutes) - minutesWithin(maker.shifts, day)));
   return left;

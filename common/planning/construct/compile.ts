@@ -11,7 +11,9 @@ import { WorkingClock } from './working-clock';
 
 /** Turns a problem into numbers. Throws on one that makes no sense (see `SENSELESS`); what merely cannot be met is left to the search. */
 export function compile(problem: Problem): Compiled {
-  const senseless = [...findIdFaults(problem), ...findAmountFaults(problem)].filter((fault) => SENSELESS.has(fault.kind));
+  const senseless = [...findIdFaults(problem), ...findAmountFaults(problem)].filter((fault) =>
+    SENSELESS.has(fault.kind),
+  );
   if (senseless.length > 0) throw new Error(`The problem makes no sense: ${JSON.stringify(senseless[0])}`);
   const origin = problem.horizon.start;
   const horizonMinutes = problem.horizon.end - origin;
@@ -36,11 +38,11 @@ export function compile(problem: Problem): Compiled {
     makers: compiledMakers,
     bays: {
       capacity: Int32Array.from(bays, (bay) => bay.capacity),
-      open: bays.map((bay) => bay.open && new Calendar(bay.open, origin, horizonMinutes)),
+      open: bays.map((bay) => bay.open && Calendar.of(bay.open, origin, horizonMinutes)),
       frees: findFreed(stages, stageIndex),
     },
     dates: compileDates(problem, stages, stageIndex),
-    workingClock: new WorkingClock(new Calendar(problem.workingTime, origin, horizonMinutes)),
+    workingClock: new WorkingClock(Calendar.of(problem.workingTime, origin, horizonMinutes)),
   };
 }
 

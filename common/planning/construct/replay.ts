@@ -1,8 +1,7 @@
 import type { Span } from '../../time/span';
-import { subtractSpans } from '../../time/span-list';
 import type { Plan } from '../problem/plan';
 import type { Problem } from '../problem/problem';
-import { Calendar } from './calendar';
+import type { Calendar } from './calendar';
 import { compile } from './compile';
 import {
   type Compiled,
@@ -22,6 +21,9 @@ import { loadPlan } from './load-plan';
 
 /** No stage: nothing in the plan made it wait. */
 export const NO_DRIVER = -1;
+
+/** Not looked up yet since the last run. */
+const UNKNOWN = -2;
 
 /**
  * A plan made ready to be lived through again and again with other times: the same order, crews and bays by the same generation
@@ -46,11 +48,9 @@ export class Replay {
   private readonly wholeOrdinary: readonly Calendar[];
   private readonly wholeExtended: readonly Calendar[];
   private readonly usersOfBay: readonly (readonly number[])[];
+  private readonly drivers: Int32Array;
 
-  constructor(
-    private readonly problem: Problem,
-    plan: Plan,
-  ) {
+  constructor(problem: Problem, plan: Plan) {
     const base = compile(problem);
     const planned = new Layout(base);
     loadPlan(planned, plan);
@@ -64,6 +64,7 @@ export class Replay {
     this.compiled = this.withPlanned(base, planned);
     this.generator = new Generator(this.compiled);
     this.genome = genomeOfPlan(this.compiled, planned);
+    this.drivers = new Int32Array(base.stageCount).fill(UNKNOWN);
     this.stageIds = base.stages.map((stage) => stage.id);
     this.makerIds = base.makerIds;
     this.usersOfBay = base.bayIds.map((_, bay) =>
@@ -74,6 +75,7 @@ export class Replay {
   /** Lays everything out with the times as they are now written. */
   run(): void {
     this.generator.decode(this.genome);
+    this.drivers.fill(UNKNOWN);
   }
 
   /** When a stage is over, dwell included, in minutes from the horizon's start; the horizon's end where it found no place. */
@@ -89,16 +91,10 @@ export class Replay {
       this.extended[maker] = this.wholeExtended[maker];
       return;
     }
-    const { start, end } = this.problem.horizon;
-    const without = (calendar: Calendar): Calendar => {
-      const spans = Array.from(calendar.starts, (from, i) => ({ start: from + start, end: calendar.ends[i] + start }));
-      return new Calendar(subtractSpans(spans, away), start, end - start);
-    };
-    this.ordinary[maker] = without(this.wholeOrdinary[maker]);
-    this.extended[maker] =
-      this.wholeExtended[maker] === this.wholeOrdinary[maker]
-        ? this.ordinary[maker]
-        : without(this.wholeExtended[maker]);
+    const { origin, horizonMinutes } = this.compiled;
+    const [ordinary, extended] = [this.wholeOrdinary[maker], this.wholeExtended[maker]];
+    this.ordinary[maker] = ordinary.less(away, origin, horizonMinutes);
+    this.extended[maker] = extended === ordinary ? this.ordinary[maker] : extended.less(away, origin, horizonMinutes);
   }
 
   /**
@@ -106,13 +102,15 @@ export class Replay {
    * let go last; NO_DRIVER where its earliest start did. Exact but for bays that hold several pieces, where it is the last to leave.
    */
   driverOf(stage: number): number {
-    const { layout } = this.generator;
-    if (layout.isPlaced[stage] === 0) return NO_DRIVER;
-    const found = { driver: NO_DRIVER, release: this.earliest[stage] };
-    this.weighLinks(stage, found);
-    this.weighCrew(stage, found);
-    this.weighBays(stage, found);
-    return found.driver;
+    if (this.generator.layout.isPlaced[stage] === 0) return NO_DRIVER;
+    if (this.drivers[stage] === UNKNOWN) {
+      const found = { driver: NO_DRIVER, release: this.earliest[stage] };
+      this.weighLinks(stage, found);
+      this.weighCrew(stage, found);
+      this.weighBays(stage, found);
+      this.drivers[stage] = found.driver;
+    }
+    return this.drivers[stage];
   }
 
   private weighLinks(stage: number, found: Release): void {

@@ -1,4 +1,5 @@
 import { dragSuite } from './drag-suite';
+import { forecastSuite } from './forecast-suite';
 import { instanceSuite } from './instance-suite';
 import { levellingSuite } from './levelling-suite';
 import { studioSuite } from './studio-suite';
@@ -45,4 +46,5 @@ export const suites: ReadonlyMap<string, Suite> = new Map<string, Suite>([
   ['levelling', levellingSuite],
   ['studio', studioSuite],
   ['drag', dragSuite],
+  ['forecast', forecastSuite],
 ]);
