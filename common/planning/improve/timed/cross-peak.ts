@@ -1,13 +1,11 @@
 import type { Chance } from '../chance';
 import type { TimedProblem } from './timed-problem';
 
-/** The share of children whose keys are shaken a little, so that a population does not grow together too soon. */
-const SHAKEN = 0.1;
-
 /**
  * Keys of a child that keeps what the mother does in a stretch of time in which she uses resources most, and takes what comes
  * before and after from the father: the peak crossover of Valls, Ballestin & Quintanilla 2008 in the form of Debels & Vanhoucke
- * 2005, where the stretch is of a random length and the fullest of its kind.
+ * 2005, where the stretch is of a random length and the fullest of its kind. The share `shaken` of children (0 to 1) has a few
+ * keys moved by chance besides.
  */
 export function crossPeak(
   problem: TimedProblem,
@@ -16,6 +14,7 @@ export function crossPeak(
   father: Int32Array,
   fatherSpan: number,
   chance: Chance,
+  shaken: number,
   keys: Int32Array,
 ): void {
   const length = Math.max(1, Math.floor(motherSpan * (0.1 + 0.3 * chance.share())));
@@ -29,7 +28,7 @@ export function crossPeak(
     else if (father[stage] >= until) keys[stage] = father[stage] + 2 * apart;
     else keys[stage] = father[stage] + apart;
   }
-  if (chance.share() >= SHAKEN) return;
+  if (chance.share() >= shaken) return;
   const shakes = 1 + chance.below(3);
   for (let k = 0; k < shakes; k += 1) {
     const stage = chance.below(problem.count);

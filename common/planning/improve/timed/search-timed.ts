@@ -66,8 +66,8 @@ export class TimedSearch {
       let from = this.forward;
       let to = this.backward;
       let idle = 0;
-      for (let last = this.populationBest(from); !this.isOver() && idle < 60; ) {
-        this.generation(from, to);
+      for (let last = this.populationBest(from); !this.isOver() && idle < PATIENCE; ) {
+        this.generation(from, to, Math.min(1, LEAST_SHAKEN + idle * SHAKEN_MORE));
         [from, to] = [to, from];
         const now = this.populationBest(from);
         idle = now < last ? 0 : idle + 1;
@@ -120,7 +120,7 @@ export class TimedSearch {
   }
 
   /** Every member of one population leaves a child in the other. */
-  private generation(from: Population, to: Population): void {
+  private generation(from: Population, to: Population, shaken: number): void {
     const { size, read, chance, keys, child } = this;
     for (let member = 0; member < size; member += 1) this.readFromFarEnd(from.starts[member], from.makespan[member], read[member]);
     const elite = this.indexOfBest(from);
@@ -132,7 +132,7 @@ export class TimedSearch {
         else {
           const mate = this.tournament(from, member);
           const [mother, father] = chance.share() < 0.5 ? [member, mate] : [mate, member];
-          crossPeak(this.problem, read[mother], from.makespan[mother], read[father], from.makespan[father], chance, keys);
+          crossPeak(this.problem, read[mother], from.makespan[mother], read[father], from.makespan[father], chance, shaken, keys);
         }
         const makespan = this.layOut(to, keys, child);
         const fitness = makespan + this.lateness(child, makespan);
@@ -184,3 +184,9 @@ export class TimedSearch {
 
 /** Children that each member has in one generation; the best of them stays. */
 const CHILDREN = 2;
+
+/** The share of children that chance shakes, and how much more with each generation that has brought nothing. */
+const LEAST_SHAKEN = 0.1;
+const SHAKEN_MORE = 0.05;
+/** Generations without gain after which the search begins anew. */
+const PATIENCE = 12;
