@@ -58,11 +58,9 @@ export class Search {
   }
   private provedBound = -Infinity;
 
-  /** Takes a known solution's values as the best so far; only better ones are sought. */
-  suggest(values: Int32Array): boolean {
-    this.best = values.slice();
-    this.phase.set(values);
-    return this.engine.assert(2 * this.goal.objective + 1, -(values[this.goal.objective] - 1));
+  /** Leads decisions towards known values, by variable; those of -1 stay as they are. */
+  lean(values: Int32Array): void {
+    for (let v = 0; v < values.length; v++) if (values[v] >= 0) this.phase[v] = values[v];
   }
 
   /** Searches until the best is proved or the budget is spent. May be called again to go on. */

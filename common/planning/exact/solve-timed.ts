@@ -25,7 +25,8 @@ export class TimedSolver {
   private readonly search: Search | null = null;
   private readonly crews: CrewVariables | null = null;
   private readonly makespan: number;
-  private isInfeasible = false;
+  private readonly orders: readonly Order[];
+  private isExhausted = false;
 
   constructor(
     private readonly model: TimedModel,
@@ -37,6 +38,7 @@ export class TimedSolver {
     const hall = model.crews === null ? [] : hallBays(model.crews, model.durations);
     const bays = [...model.bays, ...hall];
     const orders = distances === null ? [] : this.pairs(distances, bays);
+    this.orders = orders;
     const ordersEnd = orders.reduce((last, order) => Math.max(last, order.firstBefore, order.secondBefore), n) + 1;
     if (model.crews !== null) this.crews = crewVariables(model.crews, ordersEnd);
     const flags = (this.crews?.next ?? ordersEnd) - n - 1;
@@ -48,7 +50,7 @@ export class TimedSolver {
       model.latest.some((latest, k) => latest < model.earliest[k]) ||
       bays.some((bay) => bay.demands.some((units, k) => units > bay.capacity && model.durations[k] > 0));
     if (isImpossible || !this.constrain(bays, orders)) {
-      this.isInfeasible = true;
+      this.isExhausted = true;
       return;
     }
     const crewChoices = model.crews !== null && this.crews !== null ? sparingly(model.crews, this.crews) : [];
@@ -77,13 +79,27 @@ export class TimedSolver {
     return this.search?.best ? this.solution(this.search.best) : null;
   }
 
-  /** Only solutions with a smaller makespan are sought; before the first `run`. */
+  /** Only solutions with a smaller makespan are sought from now on; between runs. */
   askBelow(makespan: number): void {
-    if (!this.engine.assert(2 * this.makespan + 1, 1 - makespan)) this.isInfeasible = true;
+    if (!this.engine.assert(2 * this.makespan + 1, 1 - makespan)) this.isExhausted = true;
+  }
+
+  /** Takes starts found elsewhere as what to better: only shorter solutions are sought, near to them first; between runs. */
+  askBetterThan(starts: Int32Array, makespan: number): void {
+    this.askBelow(makespan);
+    const values = new Int32Array(this.engine.trail.value.length >> 1).fill(-1);
+    values.set(starts);
+    values[this.makespan] = makespan;
+    for (const { first, second, firstBefore, secondBefore } of this.orders) {
+      if (firstBefore >= 0) values[firstBefore] = starts[first] + this.model.durations[first] <= starts[second] ? 1 : 0;
+      if (secondBefore >= 0)
+        values[secondBefore] = starts[second] + this.model.durations[second] <= starts[first] ? 1 : 0;
+    }
+    this.search?.lean(values);
   }
 
   run(budget: SearchBudget): TimedEnd {
-    if (this.isInfeasible || this.search === null) return 'infeasible';
+    if (this.isExhausted || this.search === null) return 'infeasible';
     return this.search.run(budget);
   }
 
