@@ -19,7 +19,11 @@ describe('the edge of the API', () => {
   }
 
   it('tells that a body is not JSON', async () => {
-    expectProblem(await manager.sendText('POST', '/api/clients', '{"name": "Pell', 'application/json'), 400, 'malformed-request');
+    expectProblem(
+      await manager.sendText('POST', '/api/clients', '{"name": "Pell', 'application/json'),
+      400,
+      'malformed-request',
+    );
   });
 
   it.each(['text/plain', 'application/x-www-form-urlencoded', 'application/xml'])('refuses %s', async (contentType) => {
@@ -32,7 +36,13 @@ describe('the edge of the API', () => {
   });
 
   it('tells every field that is not right, by its pointer', async () => {
-    const maker = { name: ' ', initials: '12', crafts: [{ craftId: 'x', pacePermille: 5 }], patterns: 'none', hourCostMinor: 1.5 };
+    const maker = {
+      name: ' ',
+      initials: '12',
+      crafts: [{ craftId: 'x', pacePermille: 5 }],
+      patterns: 'none',
+      hourCostMinor: 1.5,
+    };
     const answer = await manager.post('/api/makers', maker);
     expectProblem(answer, 422, 'invalid-input');
     expect(answer.body.errors).toEqual([
@@ -84,7 +94,9 @@ describe('the edge of the API', () => {
     const { headers } = await manager.get('/api/makers');
     expect(headers.get('cache-control')).toBe('no-store');
     expect(headers.get('x-content-type-options')).toBe('nosniff');
-    expect(headers.get('content-security-policy')).toMatch(/default-src 'self';.*script-src 'self';.*frame-ancestors 'none'/);
+    expect(headers.get('content-security-policy')).toMatch(
+      /default-src 'self';.*script-src 'self';.*frame-ancestors 'none'/,
+    );
     expect(headers.get('content-security-policy')).not.toMatch(/unsafe-eval|script-src[^;]*unsafe-inline/);
     expect(headers.get('x-powered-by')).toBeNull();
   });

@@ -78,7 +78,10 @@ export class Visitor {
   /** Reads server-sent events from now on into `events`; call the result to stop. */
   async listen(): Promise<{ readonly events: Record<string, unknown>[]; stop(): void; readonly ended: Promise<void> }> {
     const abort = new AbortController();
-    const response = await fetch(`${this.address()}/api/live`, { headers: { Cookie: this.cookie }, signal: abort.signal });
+    const response = await fetch(`${this.address()}/api/live`, {
+      headers: { Cookie: this.cookie },
+      signal: abort.signal,
+    });
     if (response.status !== 200 || !response.body) throw new Error(`The stream answers ${String(response.status)}.`);
     const events: Record<string, unknown>[] = [];
     const reader = response.body.pipeThrough(new TextDecoderStream()).getReader();
@@ -183,8 +186,7 @@ export function withStudio(options: StudioOptions = {}): TestStudio {
       others.push(one);
       return one;
     },
-    trail: (subjectId) =>
-      database.dataSource.manager.find(AuditEntry, { where: { subjectId }, order: { at: 'DESC' } }),
+    trail: (subjectId) => database.dataSource.manager.find(AuditEntry, { where: { subjectId }, order: { at: 'DESC' } }),
   };
 }
 
