@@ -1,10 +1,11 @@
 import { StageBounds } from '../construct/bounds-of-stage';
 import { NEVER } from '../construct/calendar';
-import { FINISH_START, SOFT_WINDOW } from '../construct/compiled';
+import { type Crew, FINISH_START, MOVABLE, SOFT_WINDOW } from '../construct/compiled';
 import { type Ask, Fitter } from '../construct/fitter';
 import { copyFit, type Fit, type Layout, newFit } from '../construct/layout';
 import { workMinutes } from '../construct/work-minutes';
 import type { Budget } from '../stop/budget';
+import { Chance } from './chance';
 import { DayLoad } from './day-load';
 
 /** A stage is not tried on more days than this in one pass. */
@@ -12,23 +13,29 @@ const MOST_DAYS = 60;
 /** The share of a date's margin that evenness may spend. */
 const MARGIN_SHARE = 0.5;
 /** Passes without a gain before it is left alone. */
-const PATIENCE = 4;
+const PATIENCE = 9;
+/** Other crews tried for a stage on one day. */
+const MOST_CREWS = 4;
 
 /**
  * Evens the daily load of each craft by moving one stage at a time within the room that links, dates, crews and bays leave it:
- * the levelling of Burgess & Killebrew 1962, last stage first, and then first stage first, until nothing is gained. No date gets
- * later than it is or may be, no window is missed that was met, and nothing costs more.
+ * the levelling of Burgess & Killebrew 1962, last stage first, first stage first, and then in orders drawn by chance, until
+ * nothing is gained. No date gets later than it is or may be, no window is missed that was met, and nothing costs more.
  */
-export function evenOut(layout: Layout, budget: Budget): void {
+export function evenOut(layout: Layout, budget: Budget, seed: number): void {
   const { compiled } = layout;
   if (compiled.problem.weights.unevenness === 0) return;
-  const evener = new Evener(layout);
+  const evener = new Evener(layout, new Chance(seed));
   let idle = 0;
   for (let pass = 0; idle < PATIENCE && !budget.isSpent(); pass += 1) {
     budget.spend();
-    idle = evener.pass(pass % 2 === 0, () => budget.isSpent()) ? 0 : idle + 1;
+    idle = evener.pass(SWEEPS[Math.min(pass, idle) % SWEEPS.length], () => budget.isSpent()) ? 0 : idle + 1;
   }
 }
+
+/** In which order a pass takes the stages; a tie goes to the later day, to the earlier, or either way. */
+type Sweep = 'last-first' | 'first-first' | 'by-chance';
+const SWEEPS: readonly Sweep[] = ['last-first', 'first-first', 'by-chance'];
 
 class Evener {
   private readonly load: DayLoad;
@@ -36,25 +43,36 @@ class Evener {
   private readonly bounds: StageBounds;
   private readonly trial: Fit = newFit();
   private readonly best: Fit = newFit();
+  private readonly other: Fit = newFit();
   private readonly dateLimit: Float64Array;
 
-  constructor(private readonly layout: Layout) {
+  private readonly isSettled: Uint8Array;
+
+  constructor(
+    private readonly layout: Layout,
+    private readonly chance: Chance,
+  ) {
     this.load = new DayLoad(layout);
     this.fitter = new Fitter(layout);
     this.bounds = new StageBounds(layout, this.fitter);
     this.dateLimit = this.dateLimits();
+    this.isSettled = stagesAsIssued(layout);
   }
 
-  /** One pass over all movable stages; true where the sum got less. Even sums go to the later day or to the earlier. */
-  pass(lastFirst: boolean, isSpent: () => boolean): boolean {
+  /** One pass over all movable stages; true where the sum got less. */
+  pass(sweep: Sweep, isSpent: () => boolean): boolean {
     const before = this.load.sum;
     const { layout } = this;
     const { fixity } = layout.compiled.work;
-    const stages = [...layout.start.keys()].filter((stage) => fixity[stage] === 0 && layout.isPlaced[stage] === 1);
-    stages.sort((a, b) => (lastFirst ? layout.start[b] - layout.start[a] : layout.start[a] - layout.start[b]) || a - b);
+    const stages = [...layout.start.keys()].filter(
+      (stage) => fixity[stage] === MOVABLE && layout.isPlaced[stage] === 1 && this.isSettled[stage] === 0,
+    );
+    const key = Float64Array.from(layout.start, (start) => (sweep === 'by-chance' ? this.chance.share() : start));
+    stages.sort((a, b) => (sweep === 'last-first' ? key[b] - key[a] : key[a] - key[b]) || a - b);
     for (const stage of stages) {
       if (isSpent()) break;
-      if (layout.spanCount[stage] > 0 && layout.crew[stage]) this.moveToBest(stage, lastFirst);
+      const preferLate = sweep === 'by-chance' ? this.chance.share() < 0.5 : sweep === 'last-first';
+      if (layout.spanCount[stage] > 0 && layout.crew[stage]) this.moveToBest(stage, preferLate);
     }
     return this.load.sum < before;
   }
@@ -69,25 +87,52 @@ class Evener {
     layout.unplace(stage);
     const ask = this.askFor(stage, was);
     copyFit(was, best);
-    let bestSum = NEVER;
+    let bestCrew = crew;
     if (ask && crew && !isOvertime) {
-      ask.crew = crew;
+      const crews = this.crewsLike(stage, crew);
       ask.housing = housing;
-      const stay = this.sumWith(stage, was);
-      bestSum = stay;
+      let bestSum = this.sumWith(stage, was);
       for (let tries = 0; tries < MOST_DAYS && ask.lowStart <= ask.lastStart; tries += 1) {
-        if (!this.fitter.fit(ask, trial) || !this.isAllowed(trial, stage)) break;
+        const found = this.fitFirst(ask, crews);
+        if (!found || !this.isAllowed(trial, stage)) break;
         const sum = this.sumWith(stage, trial);
         const isTieKept = sum === bestSum && (preferLate ? trial.start > best.start : trial.start < best.start);
         if (sum < bestSum || isTieKept) {
           bestSum = sum;
+          bestCrew = found;
           copyFit(trial, best);
         }
         ask.lowStart = load.nextDayStart(trial.start);
       }
     }
-    layout.place(stage, best, crew, housing);
+    layout.place(stage, best, bestCrew, housing);
     load.add(stage, 1);
+  }
+
+  /** The stage's crew, and others that do the same work in the same time at no cost. */
+  private crewsLike(stage: number, crew: Crew): Crew[] {
+    const { compiled } = this.layout;
+    const isFree = (one: Crew): boolean => one.makers.every((maker) => compiled.makers.hourCost[maker] === 0);
+    const same = (one: Crew): boolean =>
+      one !== crew && one.outputPermille === crew.outputPermille && one.makers.length === crew.makers.length && isFree(one);
+    const others = compiled.work.crews[stage].filter(same);
+    const from = others.length > 0 ? this.chance.below(others.length) : 0;
+    return [crew, ...others.slice(from), ...others.slice(0, from)].slice(0, 1 + MOST_CREWS);
+  }
+
+  /** Fits the first crew that can start on the asked day, else the one that can start soonest; into the trial. */
+  private fitFirst(ask: Ask, crews: readonly Crew[]): Crew | null {
+    const { trial, other, load } = this;
+    const dayEnd = load.nextDayStart(ask.lowStart);
+    let found: Crew | null = null;
+    for (const crew of crews) {
+      ask.crew = crew;
+      if (!this.fitter.fit(ask, other) || (found && other.start >= trial.start)) continue;
+      found = crew;
+      copyFit(other, trial);
+      if (trial.start < dayEnd) break;
+    }
+    return found;
   }
 
   /** What may be asked for the stage in its present mode; null where it has missed a window or breaks a bound and is left alone. */
@@ -196,4 +241,18 @@ class Evener {
     }
     return limit;
   }
+}
+
+/** Marks stages that stand as they were issued, where a change is weighed against cost: evenness does not move those. */
+function stagesAsIssued(layout: Layout): Uint8Array {
+  const { compiled } = layout;
+  const { issued, weights } = compiled.problem;
+  const settled = new Uint8Array(compiled.stageCount);
+  if (weights.changePenaltyMinor === 0) return settled;
+  for (const placement of issued?.placements ?? []) {
+    const stage = compiled.stageIndex.get(placement.stageId);
+    const start = placement.work[0]?.start;
+    if (stage !== undefined && start !== undefined && layout.start[stage] === start - compiled.origin) settled[stage] = 1;
+  }
+  return settled;
 }

@@ -18,7 +18,7 @@ export function levelWithinDates(problem: Problem, plan: Plan, options: LevelOpt
   const layout = new Layout(compile(problem));
   loadPlan(layout, plan);
   const budget = new Budget(options.maxSchedules, options.shouldStop);
-  evenOut(layout, budget);
+  evenOut(layout, budget, options.seed);
   if (!budget.isSpent()) budget.finish('nothing-to-improve');
   return finish(problem, toPlan(layout), budget.schedules, budget.stop);
 }

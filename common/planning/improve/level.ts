@@ -52,7 +52,7 @@ function levelBySearch(problem: Problem, options: LevelOptions): LevelResult {
   search.improve();
   search.layOutBest();
   const budget = new Budget(Math.max(0, options.maxSchedules - searchBudget.schedules), options.shouldStop);
-  evenOut(search.generator.layout, budget);
+  evenOut(search.generator.layout, budget, options.seed);
   const plan = toPlan(search.generator.layout);
   return { ...finish(problem, plan, searchBudget.schedules + budget.schedules, searchBudget.stop), bound };
 }
