@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { DateRisk, ProductionSummary } from '@common/contract';
 import { KEY_DATE_NAMES } from '@common/domain/key-date';
@@ -10,6 +10,8 @@ import { marginPlace, sayDateMargin, STATE_WORDS } from './say-date-state';
 
 /** Before the first stage of a chain comes into the window of the plan. */
 const LEAD_MINUTES = 12 * 60;
+/** Steps of a chain shown before one asks for all. */
+const STEPS_SHOWN = 7;
 
 /** One key date ahead: its margin, how it stands, and the chain of stages and waits that leads to it. */
 @Component({
@@ -48,6 +50,10 @@ export class DateCard {
       };
     }),
   );
+  /** Chains can be long: their end is nearest to the date, and is shown first. */
+  protected readonly all = signal(false);
+  protected readonly shown = computed(() => (this.all() ? this.drivers() : this.drivers().slice(-STEPS_SHOWN)));
+  protected readonly before = computed(() => this.drivers().length - this.shown().length);
   protected readonly others = computed(
     () =>
       new Set(

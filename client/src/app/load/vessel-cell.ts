@@ -34,9 +34,13 @@ const MOST = HEIGHT - 8;
       }
       <path class="sides" [attr.d]="draw.sides" />
     </svg>
-    <span class="figures"
-      >{{ load() }} <span class="quiet">of {{ capacity() }}</span></span
-    >
+    @if (asked()) {
+      <span
+        >{{ load() }} <span class="quiet">of {{ capacity() }}</span></span
+      >
+    } @else {
+      <span class="quiet">{{ cell().capacityMinutes > 0 ? capacity() + ' free' : 'nobody there' }}</span>
+    }
     @if (cell().tentativeMinutes > 0) {
       <span class="note quiet">{{ tentative() }} tentative</span>
     }
@@ -86,6 +90,7 @@ export class VesselCell {
 
   protected readonly width = WIDTH;
   protected readonly height = HEIGHT;
+  protected readonly asked = computed(() => this.cell().committedMinutes + this.cell().tentativeMinutes > 0);
   protected readonly load = computed(() => sayHours(this.cell().committedMinutes + this.cell().tentativeMinutes));
   protected readonly capacity = computed(() => sayHours(this.cell().capacityMinutes));
   protected readonly tentative = computed(() => sayHours(this.cell().tentativeMinutes));

@@ -50,7 +50,7 @@ export class PlanToolbar {
     const view = this.plan.view();
     if (!view) return '';
     const when = formatDayAndTime(minuteOf(view.changedAt), view.zone);
-    const changed = `Changed ${when}${view.changedBy ? ` by ${view.changedBy}` : ''}`;
+    const changed = `${view.label}, ${when}${view.changedBy ? ` by ${view.changedBy}` : ''}`;
     if (!view.issued) return `${changed} · nothing issued yet`;
     const issued = view.issued.differs
       ? `differs from issued plan ${view.issued.number}`

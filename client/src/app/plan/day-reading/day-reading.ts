@@ -32,7 +32,7 @@ export class DayReading {
   private readonly board = inject(BoardStore);
 
   readonly selected = input<string | null>(null);
-  readonly select = output<string>();
+  readonly chosen = output<string>();
 
   private readonly most = signal(DAYS_AT_ONCE);
   private readonly entries = computed(() => {

@@ -41,7 +41,7 @@ export class Inspector {
   private readonly heading = viewChild<ElementRef<HTMLElement>>('heading');
 
   readonly stageId = input.required<string>();
-  readonly close = output();
+  readonly closed = output();
   readonly move = output<string>();
   readonly show = output<string>();
 

@@ -29,6 +29,7 @@ export class LoadStrip {
   protected readonly rowHeight = VESSEL_ROW_HEIGHT;
   protected readonly view = signal<'vessels' | 'table'>('vessels');
   protected readonly failure = this.insight.failure;
+  protected readonly fresh = this.insight.fresh;
   private readonly poured = computed(() =>
     pourVessels({
       rows: this.insight.load(),

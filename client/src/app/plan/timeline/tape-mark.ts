@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { hueColour } from '../../ui/production-hues';
+import { sayTapeName } from '../wording/say-stage';
 import type { LaidTape } from './engine/board-layout';
 import { drawTape } from './engine/draw-tape';
 import type { StageFace } from './engine/stage-face';
@@ -46,10 +47,7 @@ export class TapeMark {
   protected readonly drawing = computed(() =>
     drawTape({ tape: this.laid().tape, kind: this.face().kind, scale: this.scale(), drawn: this.drawn() }),
   );
-  protected readonly name = computed(() => {
-    const { name, pieceName } = this.face();
-    return this.namedBy() === 'stage' ? name : `${pieceName}: ${name}`;
-  });
+  protected readonly name = computed(() => sayTapeName(this.face(), this.namedBy()));
   protected readonly label = computed(() => {
     const { bodyWidth, dwellWidth } = this.drawing();
     const roomAfter = this.laid().room - this.laid().width;

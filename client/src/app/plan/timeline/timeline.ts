@@ -6,7 +6,7 @@ import {
   computed,
   DestroyRef,
   effect,
-  ElementRef,
+  type ElementRef,
   inject,
   Injector,
   input,
@@ -26,6 +26,7 @@ import { BoardStore, HEAD } from './board-store';
 import { FLAG_HEIGHT, type LaidRow, type LaidTape, LEAST_TAPE_WIDTH, TAPE_HEIGHT } from './engine/board-layout';
 import { rowAt, rowsIn, tapesIn, tapesOf } from './engine/board-window';
 import { edgeSpeed } from './engine/edge-scroll';
+import { flagLines } from './engine/flags';
 import { type TapeKey, walk, type WalkStep } from './engine/focus-walk';
 import { unlitStretches } from './engine/lit-time';
 import { flagPath } from './engine/shapes';
@@ -71,10 +72,11 @@ export class Timeline {
 
   /** The stage that the inspector shows. */
   readonly selected = input<string | null>(null);
-  readonly select = output<string>();
+  readonly chosen = output<string>();
   /** A stage to be moved by the form, asked for by key. */
   readonly saysWhy = output<string>();
 
+  protected readonly namedBy = computed(() => (this.board.rowsBy() === 'piece' ? 'stage' : 'piece-and-stage'));
   protected readonly headWidth = HEAD_WIDTH;
   protected readonly tapeHeight = TAPE_HEIGHT;
   private readonly focusKey = signal<TapeKey | null>(null);
@@ -93,9 +95,7 @@ export class Timeline {
   });
   protected readonly poles = computed(() => this.flagsInPlace().map((flag) => ({ ...flag, ...this.poleOf(flag) })));
   protected readonly headFlags = computed(() => this.flagsOf(HEAD));
-  protected readonly headFlagLines = computed(() =>
-    this.headFlags().reduce((lines, flag) => Math.max(lines, flag.lane + 1), 0),
-  );
+  protected readonly headFlagLines = computed(() => flagLines(this.board.flags().get(HEAD) ?? []));
   /** The one tape that Tab reaches: the one walked to last if it is on show, else the first that is. */
   protected readonly tabStop = computed<string | null>(() => {
     const shown = this.rows().flatMap(({ tapes }) => tapes);
@@ -219,7 +219,8 @@ export class Timeline {
     const names = this.plan.names();
     if (!face || !names) return '';
     const unmet = this.isUnmet(laid) ? ' Something about it can’t be met.' : '';
-    return sayStage(face, this.places().get(face.id), names, this.board.zone()) + unmet;
+    const how = { zone: this.board.zone(), namedBy: this.namedBy() } as const;
+    return sayStage(face, this.places().get(face.id), names, how) + unmet;
   }
 
   protected flagsOf(key: string): readonly PlacedFlag[] {
@@ -260,7 +261,7 @@ export class Timeline {
   protected click(laid: LaidTape): void {
     if (this.swallowClick) return;
     this.focusKey.set({ rowKey: laid.rowKey, stageId: laid.tape.stageId });
-    this.select.emit(laid.tape.stageId);
+    this.chosen.emit(laid.tape.stageId);
   }
 
   protected focusIn(laid: LaidTape): void {

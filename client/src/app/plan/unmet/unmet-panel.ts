@@ -12,7 +12,7 @@ import { PlanStore } from '../plan-store';
   template: `
     <header>
       <h2 tabindex="-1">What can’t be met</h2>
-      <button matButton type="button" (click)="close.emit()">Close</button>
+      <button matButton type="button" (click)="closed.emit()">Close</button>
     </header>
     <ul class="plain-list">
       @for (one of sentences(); track one.key) {
@@ -58,7 +58,7 @@ import { PlanStore } from '../plan-store';
 export class UnmetPanel {
   private readonly plan = inject(PlanStore);
 
-  readonly close = output();
+  readonly closed = output();
   readonly show = output<string>();
 
   protected readonly sentences = computed(() => {

@@ -23,12 +23,24 @@ export function sayKind(kind: StageFace['kind']): string {
   return { make: '', 'sign-off': 'sign-off', check: 'check', transport: 'transport' }[kind];
 }
 
+/** What is written on a stage's tape: in a row of its own piece the piece need not be repeated. */
+export function sayTapeName(face: StageFace, namedBy: 'stage' | 'piece-and-stage'): string {
+  return namedBy === 'stage' ? face.name : `${face.pieceName}: ${face.name}`;
+}
+
 /**
  * A stage in one breath, for whoever can't see the wall: what, of what, when, by whom, where, until when it sets, and what is
- * odd about it.
+ * odd about it. It begins with the words that are seen, so that who speaks to the page may say them (WCAG 2.2, 2.5.3).
  */
-export function sayStage(face: StageFace, placement: Placement | undefined, names: PlanNames, zone: string): string {
-  const what = `${face.name}${face.kind === 'make' ? '' : ` (${sayKind(face.kind)})`}, ${face.pieceName}, ${face.productionName}`;
+export function sayStage(
+  face: StageFace,
+  placement: Placement | undefined,
+  names: PlanNames,
+  { zone, namedBy }: { readonly zone: string; readonly namedBy: 'stage' | 'piece-and-stage' },
+): string {
+  const kind = face.kind === 'make' ? '' : ` (${sayKind(face.kind)})`;
+  const piece = namedBy === 'stage' ? `, ${face.pieceName}` : '';
+  const what = `${face.mark} ${sayTapeName(face, namedBy)}${kind}${piece}, ${face.productionName}`;
   const progress = sayProgress(face);
   const state = [face.tentative ? 'tentative' : '', progress].filter((word) => word !== '').join(', ');
   const parts = [what, ...(placement ? sayWhen(placement, names, zone) : ['not on the wall']), state];

@@ -10,7 +10,7 @@ export const ROW_PADDING = 5;
 /** Narrower than this a tape could not be hit; it is drawn true and taken hold of wider. */
 export const LEAST_TAPE_WIDTH = 14;
 export const FLAG_HEIGHT = 22;
-const LEAST_HEAD_HEIGHT = 34;
+const LEAST_HEAD_HEIGHT = 40;
 
 /** A tape with its place on the wall; `x` and `y` in pixels from the wall's own corner. */
 export interface LaidTape {
