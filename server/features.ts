@@ -1,4 +1,4 @@
-import type { FeatureParts } from './app';
+import type { FeatureParts } from './app-parts';
 import { Bays, mountBays } from './bays';
 import { ClientPage, mountClientPage } from './client-page';
 import { Crafts, Leaves, Makers, mountCrew } from './crew';

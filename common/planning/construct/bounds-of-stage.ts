@@ -160,7 +160,8 @@ export class StageBounds {
       this.capFinish(high, after);
       this.lowFinish = Math.max(this.lowFinish, low);
     }
-    if (kind === FINISH_START && links.afterWork[link] === 0 && !this.paysForWindow(stage, after)) this.keepWindowOpen(stage, target);
+    if (kind === FINISH_START && links.afterWork[link] === 0 && !this.paysForWindow(stage, after))
+      this.keepWindowOpen(stage, target);
   }
 
   /** Whether a placed follower is laid out with the extra effort of having missed the stage's soft window. */

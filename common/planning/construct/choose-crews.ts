@@ -1,7 +1,7 @@
 import type { Maker, Stage } from '../problem/problem';
 import type { Calendar } from './calendar';
 import type { CompiledMakers, Crew } from './compiled';
-import { minutesLeft } from './compile-work';
+import { minutesLeft } from './minutes-left';
 
 /** At most this many crews are weighed for one stage; the best by output and regret. */
 const MOST_CREWS = 48;
@@ -32,9 +32,19 @@ export function chooseCrews(
     const key = JSON.stringify([stage.crew, stage.crewLossPermille, given]);
     const same = known.get(key);
     if (same) return same;
-    const needs = stage.crew.map((need) => ({ craft: craftIndex.get(need.craftId) ?? -1, least: need.least, most: need.most }));
+    const needs = stage.crew.map((need) => ({
+      craft: craftIndex.get(need.craftId) ?? -1,
+      least: need.least,
+      most: need.most,
+    }));
     const teams = given
-      ? [seatGiven(given.map((id) => makerIndex.get(id) ?? -1), needs, paces)]
+      ? [
+          seatGiven(
+            given.map((id) => makerIndex.get(id) ?? -1),
+            needs,
+            paces,
+          ),
+        ]
       : combine(needs, paces);
     const crews = teams.map((team) => toCrew(stage.crewLossPermille, team, paces, tension, calendars.hourCost));
     const chosen = thin(crews.filter((crew) => crew.outputPermille > 0 || given !== null));
@@ -170,7 +180,10 @@ function craftTension(
   makers.forEach((maker, m) => {
     const minutes = calendarMinutes(calendars.ordinary[m]);
     for (const craft of maker.crafts) {
-      there.set(craft.craftId, (there.get(craft.craftId) ?? 0) + (minutes * craft.pacePermille) / 1000 / maker.crafts.length);
+      there.set(
+        craft.craftId,
+        (there.get(craft.craftId) ?? 0) + (minutes * craft.pacePermille) / 1000 / maker.crafts.length,
+      );
     }
   });
   return Float64Array.from(craftIds, (id) => (asked.get(id) ?? 0) / Math.max(1, there.get(id) ?? 0));

@@ -46,7 +46,10 @@ export function compileLinks(problem: Problem, stageCount: number, index: Readon
 }
 
 /** Positions of a column grouped by its values: group `g` is `members[offsets[g]..offsets[g + 1]]`, in order. */
-export function groupBy(column: Int32Array, groups: number): { readonly offsets: Int32Array; readonly members: Int32Array } {
+export function groupBy(
+  column: Int32Array,
+  groups: number,
+): { readonly offsets: Int32Array; readonly members: Int32Array } {
   const offsets = new Int32Array(groups + 1);
   for (const group of column) offsets[group + 1] += 1;
   for (let g = 0; g < groups; g += 1) offsets[g + 1] += offsets[g];

@@ -24,6 +24,7 @@ import {
 } from './compiled';
 import { chooseCrews } from './choose-crews';
 import { CuringCurve } from './curing-curve';
+import { minutesLeft } from './minutes-left';
 
 const CONTINUITY = { session: SESSION, shifts: SHIFTS, free: FREE, clock: CLOCK } as const;
 const HOLD = { work: HOLD_WORK, dwell: HOLD_DWELL, 'until-stage': HOLD_UNTIL } as const;
@@ -67,20 +68,18 @@ export function compileWork(
     ),
     housings: stages.map((stage) => chooseHousings(stage, bayIndex)),
     dwellAge: Float64Array.from(stages, (stage) => (stage.dwell?.minutes ?? 0) * 1000),
-    attended: Int32Array.from(stages, (stage) => (stage.progress.kind === 'finished' ? 0 : (stage.dwell?.attendedMinutes ?? 0))),
-    windowKind: Uint8Array.from(window, (one) => (one === null ? NO_WINDOW : one.kind === 'soft' ? SOFT_WINDOW : HARD_WINDOW)),
+    attended: Int32Array.from(stages, (stage) =>
+      stage.progress.kind === 'finished' ? 0 : (stage.dwell?.attendedMinutes ?? 0),
+    ),
+    windowKind: Uint8Array.from(window, (one) =>
+      one === null ? NO_WINDOW : one.kind === 'soft' ? SOFT_WINDOW : HARD_WINDOW,
+    ),
     windowAge: Float64Array.from(window, (one) => (one?.minutes ?? 0) * 1000),
     windowExtra: Int32Array.from(window, (one) => (one?.kind === 'soft' ? one.extraMinutes : 0)),
     windowCost: Float64Array.from(window, (one) => (one?.kind === 'soft' ? one.costMinor : 0)),
     curves: compileCurves(problem, stages, bayIndex),
     keptPlace: Int32Array.from(stages, (stage) => stage.places.findIndex((place) => place.hold.kind !== 'work')),
   };
-}
-
-/** Minutes of a stage's effort that are still to be laid out. */
-export function minutesLeft(stage: Stage): number {
-  if (stage.progress.kind === 'finished') return 0;
-  return stage.progress.kind === 'started' ? stage.progress.remainingMinutes : stage.effort.minutes;
 }
 
 function offsetsOf(stages: readonly Stage[], count: (stage: Stage) => number): Int32Array {
@@ -106,7 +105,9 @@ function compileCurves(
   stages: readonly Stage[],
   bayIndex: ReadonlyMap<string, number>,
 ): (ReadonlyMap<number, CuringCurve> | null)[] {
-  const curves = new Map(problem.advances.map((profile) => [profile.id, new CuringCurve(profile, problem.horizon.start)]));
+  const curves = new Map(
+    problem.advances.map((profile) => [profile.id, new CuringCurve(profile, problem.horizon.start)]),
+  );
   return stages.map((stage) => {
     const entries = Object.entries(stage.dwell?.advance ?? {});
     if (entries.length === 0) return null;

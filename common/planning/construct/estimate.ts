@@ -83,9 +83,12 @@ function backwardPass(compiled: Compiled, order: Int32Array, work: Float64Array,
   for (let date = 0; date < dates.count; date += 1) {
     // A wished date pulls less than a hard one: its slack counts as if it were a little later.
     const slackOf = dates.isHard[date] === 1 ? 0 : 1;
-    for (const stage of dates.stages[date]) latestFinish[stage] = Math.min(latestFinish[stage], dates.at[date] + slackOf);
+    for (const stage of dates.stages[date])
+      latestFinish[stage] = Math.min(latestFinish[stage], dates.at[date] + slackOf);
   }
-  const start = latestFinish.map((finish, stage) => Math.min(finish - whole[stage], compiled.work.latest[stage] - work[stage]));
+  const start = latestFinish.map((finish, stage) =>
+    Math.min(finish - whole[stage], compiled.work.latest[stage] - work[stage]),
+  );
   for (let p = order.length - 1; p >= 0; p -= 1) {
     const stage = order[p];
     for (let k = links.outOf[stage]; k < links.outOf[stage + 1]; k += 1) {
@@ -103,7 +106,8 @@ export function startToStart(compiled: Compiled, link: number, work: Float64Arra
   const to = links.to[link];
   const kind = links.kind[link];
   const gap = links.minGap[link];
-  const firstPart = kind === FINISH_START || kind === FINISH_FINISH ? (links.afterWork[link] === 1 ? work[from] : whole[from]) : 0;
+  const firstPart =
+    kind === FINISH_START || kind === FINISH_FINISH ? (links.afterWork[link] === 1 ? work[from] : whole[from]) : 0;
   const secondPart = kind === FINISH_START || kind === START_START ? 0 : work[to];
   return firstPart + gap - secondPart;
 }

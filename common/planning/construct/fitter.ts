@@ -48,7 +48,8 @@ export class Fitter {
     this.gatherCalendars(ask);
     let t = ask.lowStart;
     while (t <= ask.lastStart) {
-      if (!this.buildWork(ask, t, out) || this.until > this.compiled.horizonMinutes || this.from > ask.lastStart) return false;
+      if (!this.buildWork(ask, t, out) || this.until > this.compiled.horizonMinutes || this.from > ask.lastStart)
+        return false;
       const finish = this.dwellEnd(ask, this.until);
       const retry = this.nextTry(ask, this.from, this.until, finish);
       if (retry < 0) {
@@ -127,7 +128,8 @@ export class Fitter {
   private gatherCalendars(ask: Ask): void {
     this.calendarCount = 0;
     if (this.leniency === 'calendars') return;
-    if (ask.crew) for (const maker of ask.crew.makers) this.calendars[this.calendarCount++] = this.calendarOf(maker, ask.overtime);
+    if (ask.crew)
+      for (const maker of ask.crew.makers) this.calendars[this.calendarCount++] = this.calendarOf(maker, ask.overtime);
     if (!ask.housing) return;
     for (const bay of ask.housing) {
       const open = bay >= 0 ? this.compiled.bays.open[bay] : null;
@@ -145,13 +147,14 @@ export class Fitter {
     }
     if (ask.minutes >= NEVER) return false;
     const continuity = this.compiled.work.continuity[ask.stage];
-    if (continuity === SESSION || continuity === CLOCK || this.calendarCount === 0) return this.buildSession(ask, t, out);
+    if (continuity === SESSION || continuity === CLOCK || this.calendarCount === 0)
+      return this.buildSession(ask, t, out);
     return continuity === FREE ? this.buildFree(ask, t, out) : this.buildShifts(ask, t, out);
   }
 
   private buildSession(ask: Ask, from: number, out: Fit): boolean {
     let t = from;
-    for (let settled = false; !settled; ) {
+    for (let settled = false; !settled;) {
       const before = t;
       for (let k = 0; k < this.calendarCount; k += 1) t = nextStretch(this.calendars[k] as Calendar, t, ask.minutes);
       if (t >= NEVER || t > ask.lastStart) return false;
@@ -224,7 +227,8 @@ export class Fitter {
 
   private firstBookingStart(ask: Ask, from: number): number {
     let first = NEVER;
-    if (ask.crew) for (const maker of ask.crew.makers) first = Math.min(first, this.layout.bookings[maker].nextStart(from));
+    if (ask.crew)
+      for (const maker of ask.crew.makers) first = Math.min(first, this.layout.bookings[maker].nextStart(from));
     return first;
   }
 

@@ -39,7 +39,15 @@ function placeFinished(layout: Layout, fitter: Fitter, stage: number): void {
 
 function placeStarted(layout: Layout, fitter: Fitter, stage: number): void {
   const { work } = layout.compiled;
-  const found = firstFit(layout, fitter, stage, Math.max(0, work.fixedStart[stage]), NEVER, ['bays', 'other-work', 'calendars'], null);
+  const found = firstFit(
+    layout,
+    fitter,
+    stage,
+    Math.max(0, work.fixedStart[stage]),
+    NEVER,
+    ['bays', 'other-work', 'calendars'],
+    null,
+  );
   found.fit.start = work.fixedStart[stage];
   if (work.minutes[stage] === 0) {
     found.fit.end = found.fit.start;
@@ -50,10 +58,13 @@ function placeStarted(layout: Layout, fitter: Fitter, stage: number): void {
 
 function placeFrozen(layout: Layout, fitter: Fitter, stage: number): void {
   const { compiled } = layout;
-  const issued = compiled.problem.issued?.placements.find((placement) => placement.stageId === compiled.stages[stage].id);
+  const issued = compiled.problem.issued?.placements.find(
+    (placement) => placement.stageId === compiled.stages[stage].id,
+  );
   if (!issued) return;
   const fit = newFit();
-  for (const span of issued.work) if (span.end > span.start) pushSpan(fit, span.start - compiled.origin, span.end - compiled.origin);
+  for (const span of issued.work)
+    if (span.end > span.start) pushSpan(fit, span.start - compiled.origin, span.end - compiled.origin);
   fit.start = issued.work[0].start - compiled.origin;
   fit.end = issued.work[issued.work.length - 1].end - compiled.origin;
   const seats = issued.crew
@@ -82,7 +93,16 @@ export function placeAt(
   extraEffort: number,
   only: Choice | null,
 ): void {
-  const found = firstFit(layout, fitter, stage, start, start, ['none', 'bays', 'other-work', 'calendars'], only, extraEffort);
+  const found = firstFit(
+    layout,
+    fitter,
+    stage,
+    start,
+    start,
+    ['none', 'bays', 'other-work', 'calendars'],
+    only,
+    extraEffort,
+  );
   layout.place(stage, found.fit, found.crew, found.housing);
 }
 

@@ -23,8 +23,15 @@ export class Generator {
   private readonly fitter: Fitter;
   private readonly bounds: StageBounds;
   private readonly ask: Ask = {
-    stage: 0, crew: null, housing: null, minutes: 0,
-    lowStart: 0, lowEnd: 0, lowFinish: 0, lastStart: NEVER, overtime: false,
+    stage: 0,
+    crew: null,
+    housing: null,
+    minutes: 0,
+    lowStart: 0,
+    lowEnd: 0,
+    lowFinish: 0,
+    lastStart: NEVER,
+    overtime: false,
   };
   private readonly trial: Fit = newFit();
   private readonly best: Fit = newFit();
@@ -180,9 +187,10 @@ export class Generator {
     ask.lowStart = bounds.lowStart;
     ask.lowEnd = bounds.lowEnd;
     ask.lowFinish = bounds.lowFinish;
-    for (let extra = -1; ; ) {
+    for (let extra = -1; ;) {
       let owed = 0;
-      for (let k = 0; k < bounds.softUntil.length; k += 1) if (ask.lowStart > bounds.softUntil[k]) owed += bounds.softExtra[k];
+      for (let k = 0; k < bounds.softUntil.length; k += 1)
+        if (ask.lowStart > bounds.softUntil[k]) owed += bounds.softExtra[k];
       if (owed === extra) return true;
       extra = owed;
       ask.minutes = workMinutes(this.compiled, ask.stage, effort + extra, ask.crew);

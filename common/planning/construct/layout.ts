@@ -1,7 +1,7 @@
 import { BayTimeline } from './bay-timeline';
 import { Bookings } from './bookings';
 import { NEVER } from './calendar';
-import { type Compiled, type Crew, HOLD_DWELL, HOLD_UNTIL, HOLD_WORK } from './compiled';
+import { type Compiled, type Crew, HOLD_DWELL, HOLD_UNTIL, HOLD_WORK, SHIFTS } from './compiled';
 import { curedBy } from './cured-by';
 
 /** One way to place one stage, as found by a fit; reused from fit to fit. */
@@ -113,7 +113,8 @@ export class Layout {
     this.keepSpans(stage, fit);
     if (crew) this.book(stage, crew);
     if (housing) this.takeBays(stage, housing);
-    for (const holder of this.compiled.bays.frees[stage]) if (this.isPlaced[holder]) this.setHold(holder, stage, fit.end);
+    for (const holder of this.compiled.bays.frees[stage])
+      if (this.isPlaced[holder]) this.setHold(holder, stage, fit.end);
   }
 
   /** Takes a stage out again; what it had let go is held once more. */
@@ -150,6 +151,10 @@ export class Layout {
   }
 
   private book(stage: number, crew: Crew): void {
+    if (this.isBookedWhole(stage, crew)) {
+      this.bookings[crew.makers[0]].add(this.spanPool[this.spanAt[stage]], this.end[stage], stage);
+      return;
+    }
     for (const maker of crew.makers) {
       const bookings = this.bookings[maker];
       for (let k = this.spanAt[stage], left = this.spanCount[stage]; left > 0; k += 2, left -= 1) {
@@ -159,12 +164,28 @@ export class Layout {
   }
 
   private unbook(stage: number, crew: Crew): void {
+    if (this.isBookedWhole(stage, crew)) {
+      this.bookings[crew.makers[0]].remove(this.spanPool[this.spanAt[stage]], this.end[stage], stage);
+      return;
+    }
     for (const maker of crew.makers) {
       const bookings = this.bookings[maker];
       for (let k = this.spanAt[stage], left = this.spanCount[stage]; left > 0; k += 2, left -= 1) {
         bookings.remove(this.spanPool[k], this.spanPool[k + 1], stage);
       }
     }
+  }
+
+  /**
+   * Whether the nights between a stage's spans are booked with them: one maker alone, who does nothing else while on shift. One
+   * long booking is found faster than many short ones.
+   */
+  private isBookedWhole(stage: number, crew: Crew): boolean {
+    const { work, bays } = this.compiled;
+    if (work.continuity[stage] !== SHIFTS || crew.makers.length !== 1 || this.spanCount[stage] < 2) return false;
+    const housing = this.housing[stage];
+    if (housing) for (const bay of housing) if (bay >= 0 && bays.open[bay] !== null) return false;
+    return true;
   }
 
   private takeBays(stage: number, housing: Int32Array): void {

@@ -21,7 +21,8 @@ function loadPlacement(layout: Layout, stage: number, placement: Placement): voi
   fit.start = placement.work[0].start - origin;
   fit.end = placement.work[placement.work.length - 1].end - origin;
   fit.finish = placement.dwellEnd - origin;
-  const spans = work.fixity[stage] === FINISHED ? [] : work.fixity[stage] === STARTED ? placement.work.slice(1) : placement.work;
+  const spans =
+    work.fixity[stage] === FINISHED ? [] : work.fixity[stage] === STARTED ? placement.work.slice(1) : placement.work;
   for (const span of spans) if (span.end > span.start) pushSpan(fit, span.start - origin, span.end - origin);
   const crew = crewOf(compiled, stage, placement);
   const housing = Int32Array.from(placement.bayIds, (id) => compiled.bayIds.indexOf(id));

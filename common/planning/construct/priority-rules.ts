@@ -11,10 +11,12 @@ export type PriorityRule = (compiled: Compiled, estimate: Estimate) => Float64Ar
 export const latestStartFirst: PriorityRule = (_, estimate) => estimate.latestStart;
 
 /** Latest finish time. */
-export const latestFinishFirst: PriorityRule = (_, estimate) => estimate.latestStart.map((start, stage) => start + estimate.whole[stage]);
+export const latestFinishFirst: PriorityRule = (_, estimate) =>
+  estimate.latestStart.map((start, stage) => start + estimate.whole[stage]);
 
 /** Least slack between earliest and latest start. */
-export const leastSlackFirst: PriorityRule = (_, estimate) => estimate.latestStart.map((start, stage) => start - estimate.earliestStart[stage]);
+export const leastSlackFirst: PriorityRule = (_, estimate) =>
+  estimate.latestStart.map((start, stage) => start - estimate.earliestStart[stage]);
 
 /** Most total successors. */
 export const mostSuccessorsFirst: PriorityRule = (compiled, estimate) => {
@@ -39,7 +41,8 @@ export const greatestRankFirst: PriorityRule = (compiled, estimate) => {
   const { links } = compiled;
   return estimate.whole.map((minutes, stage) => {
     let weight = minutes;
-    for (let k = links.outOf[stage]; k < links.outOf[stage + 1]; k += 1) weight += estimate.whole[links.to[links.outLinks[k]]];
+    for (let k = links.outOf[stage]; k < links.outOf[stage + 1]; k += 1)
+      weight += estimate.whole[links.to[links.outLinks[k]]];
     return -weight;
   });
 };
@@ -49,7 +52,8 @@ export const weightedDatesFirst: PriorityRule = (compiled, estimate) => {
   const { dates } = compiled;
   const weight = new Float64Array(compiled.stageCount);
   for (let date = 0; date < dates.count; date += 1) {
-    for (const stage of dates.stages[date]) weight[stage] = Math.max(weight[stage], dates.weight[date] * (dates.isHard[date] === 1 ? 8 : 1));
+    for (const stage of dates.stages[date])
+      weight[stage] = Math.max(weight[stage], dates.weight[date] * (dates.isHard[date] === 1 ? 8 : 1));
   }
   const { links } = compiled;
   for (let p = compiled.stageCount - 1; p >= 0; p -= 1) {

@@ -2,7 +2,7 @@ import { TimedSolver } from '../exact/solve-timed';
 import { timedModel } from '../exact/timed-model';
 import type { Link } from '../problem/link';
 import type { Problem } from '../problem/problem';
-import type { Conflict, ConflictBudget } from './conflict';
+import type { Conflict, ConflictBudget } from './conflict-data';
 
 /** One requirement that may be left out to see whether the conflict is still there. */
 type Part =
