@@ -31,9 +31,11 @@ interface Outcome {
 export function mountGoogle({ app, config, log, passport, transactions }: GoogleParts): void {
   const { google, publicUrl } = config;
   if (google === null) {
-    app.get(['/api/session/google', GOOGLE_CALLBACK], () => {
-      throw new Problem('not-configured', 'Signing in through Google is not set up here. Use your password.');
-    });
+    for (const path of ['/api/session/google', GOOGLE_CALLBACK]) {
+      app.get(path, () => {
+        throw new Problem('not-configured', 'Signing in through Google is not set up here. Use your password.');
+      });
+    }
     return;
   }
   passport.use(googleStrategy(google, publicUrl, transactions));
