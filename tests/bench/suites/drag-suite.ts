@@ -12,7 +12,7 @@ const WARMING_MOVES = 20;
 
 /** How long the answer to a drag takes: random stages of a levelled studio moved by hours or days, each from the same plan. */
 export const dragSuite: Suite = {
-  about: `a stage dragged in a levelled studio (sets ${studioNames.join(', ')}: stages)`,
+  about: `a stage dragged in a levelled studio (sets ${studioNames.join(', ')}: the demo, or invented ones of so many stages)`,
   run: (options) => {
     const set = options.set ?? '1500';
     const studio = benchStudio(set, options.seed);

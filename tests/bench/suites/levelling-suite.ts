@@ -7,9 +7,9 @@ import { rounded, type Suite } from './suite';
 
 /** How much evener the load of a plan becomes without moving any date, maker or bay. */
 export const levellingSuite: Suite = {
-  about: `load evened within the dates of a plan (sets ${studioNames.join(', ')}: stages)`,
+  about: `load evened within the dates of a plan (sets ${studioNames.join(', ')}: the demo, or invented ones of so many stages)`,
   run: (options) => {
-    const set = options.set ?? '200';
+    const set = options.set ?? 'demo';
     const studio = benchStudio(set, options.seed);
     if (studio === null) {
       options.say(`There is no studio ${set}; there are ${studioNames.join(', ')}. Nothing was run.`);

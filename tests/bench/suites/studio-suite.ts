@@ -15,9 +15,9 @@ interface Heard {
 
 /** Levels an invented studio and tells how soon a plan without faults is there and how soon it is nearly as good as the last. */
 export const studioSuite: Suite = {
-  about: `a studio with shifts, dwells and bays (sets ${studioNames.join(', ')}: stages)`,
+  about: `a studio with shifts, dwells and bays (sets ${studioNames.join(', ')}: the demo, or invented ones of so many stages)`,
   run: (options) => {
-    const set = options.set ?? '200';
+    const set = options.set ?? 'demo';
     const studio = benchStudio(set, options.seed);
     if (studio === null) {
       options.say(`There is no studio ${set}; there are ${studioNames.join(', ')}. Nothing was run.`);
