@@ -5,7 +5,7 @@ import type { Plan } from '@common/planning/problem/plan';
 import { seededRandom } from '../../engine/support/seeded-random';
 import { startStopwatch } from '../budget';
 import { benchStudio, studioNames } from '../studios/studios';
-import { percentile, rounded, type Suite } from './suite';
+import { percentile, rounded, type Suite, type SuiteFigures } from './suite';
 
 const USUAL_MOVES = 200;
 const WARMING_MOVES = 20;
@@ -13,7 +13,7 @@ const WARMING_MOVES = 20;
 /** How long the answer to a drag takes: random stages of a levelled studio moved by hours or days, each from the same plan. */
 export const dragSuite: Suite = {
   about: `a stage dragged in a levelled studio (sets ${studioNames.join(', ')}: the demo, or invented ones of so many stages)`,
-  run: (options) => {
+  run: (options): SuiteFigures => {
     const set = options.set ?? '1500';
     const studio = benchStudio(set, options.seed);
     if (studio === null) {

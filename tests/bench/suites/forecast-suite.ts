@@ -4,14 +4,14 @@ import { level } from '@common/planning/improve/level';
 import type { Problem } from '@common/planning/problem/problem';
 import { startStopwatch } from '../budget';
 import { benchStudio, studioNames } from '../studios/studios';
-import { rounded, type Suite } from './suite';
+import { rounded, type Suite, type SuiteFigures } from './suite';
 
 const DRAWS = 1000;
 
 /** How long a thousand draws of a levelled studio take on one core, after one run that warms up. */
 export const forecastSuite: Suite = {
   about: `a levelled studio lived through ${String(DRAWS)} times (sets ${studioNames.join(', ')}: stages)`,
-  run: (options) => {
+  run: (options): SuiteFigures => {
     const set = options.set ?? '200';
     const studio = benchStudio(set, options.seed);
     if (studio === null) {

@@ -3,12 +3,12 @@ import { level } from '@common/planning/improve/level';
 import { levelWithinDates } from '@common/planning/improve/level-within-dates';
 import { levelOptions, startStopwatch, type Budget } from '../budget';
 import { benchStudio, studioNames } from '../studios/studios';
-import { rounded, type Suite } from './suite';
+import { rounded, type Suite, type SuiteFigures } from './suite';
 
 /** How much evener the load of a plan becomes without moving any date, maker or bay. */
 export const levellingSuite: Suite = {
   about: `load evened within the dates of a plan (sets ${studioNames.join(', ')}: the demo, or invented ones of so many stages)`,
-  run: (options) => {
+  run: (options): SuiteFigures => {
     const set = options.set ?? 'demo';
     const studio = benchStudio(set, options.seed);
     if (studio === null) {

@@ -16,7 +16,7 @@ interface Heard {
 /** Levels an invented studio and tells how soon a plan without faults is there and how soon it is nearly as good as the last. */
 export const studioSuite: Suite = {
   about: `a studio with shifts, dwells and bays (sets ${studioNames.join(', ')}: the demo, or invented ones of so many stages)`,
-  run: (options) => {
+  run: (options): SuiteFigures => {
     const set = options.set ?? 'demo';
     const studio = benchStudio(set, options.seed);
     if (studio === null) {
