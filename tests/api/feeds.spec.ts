@@ -1,4 +1,5 @@
 import ICAL from 'ical.js';
+import { FeedView, LevelRun, NewFeed, ProblemDetails, Revised, WorkingPlanView } from '@common/contract';
 import { DEMO_PASSWORD } from '@database/demo/seed-accounts';
 import { seedDemo } from '@database/demo/seed';
 import { Account, FeedToken, IssuedEntry, Maker, Production } from '@database/entities';
@@ -9,6 +10,7 @@ import {
   type CalendarComponent,
 } from '../../server/feeds/testing/check-calendar';
 import { withDatabase } from '../support/test-database';
+import { bodyOf } from './body-of';
 import { eventually, withStudio, type Visitor } from './studio';
 
 /** A Tuesday morning; tests set it on. */
@@ -33,9 +35,10 @@ async function read(url: string, headers: Record<string, string> = {}, method = 
 }
 
 async function createFeed(visitor: Visitor, scope: object): Promise<Feed> {
-  const { status, body } = await visitor.post('/api/feeds', { scope });
-  if (status !== 201) throw new Error(`Making an address answers ${String(status)}: ${JSON.stringify(body)}`);
-  return { id: body.id as string, url: body.httpsUrl as string };
+  const answer = await visitor.post('/api/feeds', { scope });
+  if (answer.status !== 201) throw new Error(`Making an address answers ${String(answer.status)}.`);
+  const { id, httpsUrl } = bodyOf(NewFeed, answer);
+  return { id, url: httpsUrl };
 }
 
 function eventsOf(text: string): readonly CalendarComponent[] {
@@ -44,10 +47,10 @@ function eventsOf(text: string): readonly CalendarComponent[] {
 
 /** Levels and issues, as a manager does. */
 async function issue(manager: Visitor, note: string): Promise<void> {
-  const { body: plan } = await manager.get('/api/plan');
-  const { body: run } = await manager.post('/api/plan/level', { revision: plan.revision, seconds: 0.5, seed: 1 });
-  await eventually(async () => (await manager.get(`/api/plan/level/${String(run.id)}`)).body.state === 'found');
-  const { body: taken } = await manager.post(`/api/plan/level/${String(run.id)}/take`, { revision: plan.revision });
+  const { revision } = bodyOf(WorkingPlanView, await manager.get('/api/plan'));
+  const { id } = bodyOf(LevelRun, await manager.post('/api/plan/level', { revision, seconds: 0.5, seed: 1 }));
+  await eventually(async () => bodyOf(LevelRun, await manager.get(`/api/plan/level/${id}`)).state === 'found');
+  const taken = bodyOf(Revised, await manager.post(`/api/plan/level/${id}/take`, { revision }));
   const issued = await manager.post('/api/plan/issue', { revision: taken.revision, note });
   if (issued.status !== 201) throw new Error(`Issuing answers ${JSON.stringify(issued.body)}`);
 }
@@ -100,8 +103,9 @@ describe('calendars of the demo studio', () => {
       const another = makers.find((one) => one.id !== makerAccount.makerId);
       const own = await maker.post('/api/feeds', { scope: { kind: 'maker', makerId: makerAccount.makerId } });
       expect(own.status).toBe(201);
-      expect(own.body.httpsUrl).toMatch(/\/api\/calendar\/[A-Za-z0-9_-]{43}\.ics$/);
-      expect(own.body.webcalUrl).toBe(own.body.httpsUrl.replace(/^http:/, 'webcal:'));
+      const { httpsUrl, webcalUrl } = bodyOf(NewFeed, own);
+      expect(httpsUrl).toMatch(/\/api\/calendar\/[A-Za-z0-9_-]{43}\.ics$/);
+      expect(webcalUrl).toBe(httpsUrl.replace(/^http:/, 'webcal:'));
       for (const scope of [
         { kind: 'maker', makerId: another?.id },
         { kind: 'production', productionId: ownProduction.id },
@@ -118,7 +122,8 @@ describe('calendars of the demo studio', () => {
         scope: { kind: 'production', productionId: otherProduction.id },
       });
       const none = await client.post('/api/feeds', { scope: { kind: 'production', productionId: studio.makerId } });
-      expect([other.status, other.body.detail]).toEqual([none.status, none.body.detail]);
+      expect(bodyOf(ProblemDetails, other).detail).toBe(bodyOf(ProblemDetails, none).detail);
+      expect(none.status).toBe(404);
       expect(other.status).toBe(404);
       expect((await client.post('/api/feeds', { scope: { kind: 'studio' } })).status).toBe(403);
       const { makerId } = makerAccount;
@@ -138,11 +143,12 @@ describe('calendars of the demo studio', () => {
 
     it('lists one’s own alone, without secrets, and closes one’s own alone', async () => {
       const { id, url } = await createFeed(maker, { kind: 'maker', makerId: makerAccount.makerId });
-      const { body } = await maker.get('/api/feeds');
+      const own = bodyOf(FeedView.array(), await maker.get('/api/feeds'));
       const secret = /([A-Za-z0-9_-]{43})\.ics$/.exec(url)?.[1] ?? 'none';
-      expect(body.map((feed: { id: string }) => feed.id)).toContain(id);
-      expect(JSON.stringify(body)).not.toContain(secret);
-      expect((await client.get('/api/feeds')).body.map((feed: { id: string }) => feed.id)).not.toContain(id);
+      expect(own.map((feed) => feed.id)).toContain(id);
+      expect(JSON.stringify((await maker.get('/api/feeds')).body)).not.toContain(secret);
+      const others = bodyOf(FeedView.array(), await client.get('/api/feeds'));
+      expect(others.map((feed) => feed.id)).not.toContain(id);
       expect((await client.delete(`/api/feeds/${id}`)).status).toBe(404);
       expect((await manager.delete(`/api/feeds/${id}`)).status).toBe(404);
       expect((await read(url)).status).toBe(200);
@@ -249,23 +255,17 @@ describe('calendars of the demo studio', () => {
     const before = await read(url);
     now = new Date(now.getTime() + 60_000);
     await issue(manager, 'the same again');
-    const { body: plan } = await manager.get('/api/plan');
-    const later = Math.max(
-      ...plan.plan.placements.map((placement: { work: { start: number }[] }) => placement.work[0].start),
-    );
-    const last = plan.plan.placements.find(
-      (placement: { work: { start: number }[] }) => placement.work[0].start === later,
-    );
+    const { revision, plan } = bodyOf(WorkingPlanView, await manager.get('/api/plan'));
+    const [last] = [...plan.placements].sort((a, b) => b.work[0].start - a.work[0].start);
     const moved = await manager.post('/api/plan/moves', {
-      revision: plan.revision,
+      revision,
       stageId: last.stageId,
-      start: later + 24 * 60,
+      start: last.work[0].start + 24 * 60,
       makerIds: null,
       bayIds: null,
     });
-    expect(moved.status).toBe(200);
     now = new Date(now.getTime() + 60_000);
-    const issued = await manager.post('/api/plan/issue', { revision: moved.body.revision });
+    const issued = await manager.post('/api/plan/issue', { revision: bodyOf(Revised, moved).revision });
     expect(issued.status).toBe(201);
     const after = await read(url);
     expect(calendarFaults(after.bytes)).toEqual([]);

@@ -1,5 +1,7 @@
+import { ProblemDetails, SessionView } from '@common/contract';
 import { Account } from '@database/entities';
 import { startGoogleStandIn, type StandIn, type StandInPerson } from '../../server/session/google-stand-in';
+import { bodyOf } from './body-of';
 import { emailOf, withStudio, type Answer, type Visitor } from './studio';
 
 const REGISTRATION = { clientId: 'fettle-tests', clientSecret: 'a secret for tests' };
@@ -42,7 +44,7 @@ describe('signing in through Google', () => {
   }
 
   const who = async (visitor: Visitor): Promise<string | null> =>
-    ((await visitor.get('/api/session')).body.account?.email as string | undefined) ?? null;
+    bodyOf(SessionView, await visitor.get('/api/session')).account?.email ?? null;
 
   const known = (role: Account['role'], subject: string): StandInPerson => ({
     subject,
@@ -52,7 +54,7 @@ describe('signing in through Google', () => {
   });
 
   it('is offered where it is set up', async () => {
-    expect((await studio.visitor().get('/api/session')).body.googleSignIn).toBe(true);
+    expect(bodyOf(SessionView, await studio.visitor().get('/api/session')).googleSignIn).toBe(true);
   });
 
   it('lets in whom the owner made an account, ties the two, and begins a new session', async () => {
@@ -165,10 +167,10 @@ describe('a studio without Google', () => {
 
   it('does not offer it, and says so to who asks', async () => {
     const visitor = studio.visitor();
-    expect((await visitor.get('/api/session')).body.googleSignIn).toBe(false);
+    expect(bodyOf(SessionView, await visitor.get('/api/session')).googleSignIn).toBe(false);
     for (const path of ['/api/session/google', '/api/session/google/callback?code=x&state=y']) {
       const answer = await visitor.get(path);
-      expect([answer.status, answer.body.type]).toEqual([503, '/problems/not-configured']);
+      expect([answer.status, bodyOf(ProblemDetails, answer).type]).toEqual([503, '/problems/not-configured']);
     }
   });
 });

@@ -1,8 +1,9 @@
-import { MATERIAL_MILESTONES } from '@common/contract';
+import { BayView, MaterialView, ProblemDetails, StageImportResult, WorkingPlanView } from '@common/contract';
 import { DEMO_PASSWORD } from '@database/demo/seed-accounts';
 import { seedDemo } from '@database/demo/seed';
 import { Link, Piece, Production, Stage } from '@database/entities';
 import { withDatabase } from '../support/test-database';
+import { bodyOf } from './body-of';
 import { withStudio, type Answer, type Visitor } from './studio';
 
 const HEAD = 'piece,stage,craft,likely hours,after';
@@ -62,14 +63,16 @@ describe('importing stages', () => {
     expect(links.map((link) => link.toStageId).sort()).toEqual([layUp.id, weld.id].sort());
     expect((await studio.trail(production.id))[0]).toMatchObject({ action: 'imported' });
     expect((await manager.get(`/api/productions/${production.id}`)).status).toBe(200);
-    const { body: plan } = await manager.get('/api/plan');
-    expect(plan.directory.stages.map((stage: { id: string }) => stage.id)).toContain(weld.id);
+    const { directory } = bodyOf(WorkingPlanView, await manager.get('/api/plan'));
+    expect(directory.stages.map((stage) => stage.id)).toContain(weld.id);
   });
 
   it('takes nothing where one row is at fault, and names it', async () => {
     const before = await database.dataSource.manager.count(Stage);
-    const { status, body } = await send(`${HEAD}\nGhost,Carve,carving,2,\nGhost,Paint,paintig,2,\n`, 'take');
-    expect(status).toBe(200);
+    const body = bodyOf(
+      StageImportResult,
+      await send(`${HEAD}\nGhost,Carve,carving,2,\nGhost,Paint,paintig,2,\n`, 'take'),
+    );
     expect(body).toMatchObject({ pieces: 0, stages: 0, taken: false });
     expect(body.faults).toEqual([
       { pointer: '/csv', line: 3, detail: expect.stringContaining('“paintig” is not known') as string },
@@ -88,7 +91,7 @@ describe('importing stages', () => {
   });
 
   it('refuses the same rows a second time', async () => {
-    const { body } = await send(`${HEAD}\nFin,Cut,carving,1,-`, 'take');
+    const body = bodyOf(StageImportResult, await send(`${HEAD}\nFin,Cut,carving,1,-`, 'take'));
     expect(body.faults[0].detail).toBe('“Fin: Cut” is in the production already. Give this one another name.');
   });
 
@@ -105,7 +108,7 @@ describe('importing stages', () => {
 
   it('says clearly what is too long', async () => {
     const long = await send('x'.repeat(1_500_001), 'try');
-    expect([long.status, long.body.errors[0].detail]).toEqual([
+    expect([long.status, bodyOf(ProblemDetails, long).detail]).toEqual([
       422,
       'The file is longer than 1,500,000 characters. Split it.',
     ]);
@@ -116,7 +119,7 @@ describe('importing stages', () => {
   it('takes 10,000 rows within seconds, and all of them', async () => {
     const rows = Array.from({ length: 10_000 }, (_, index) => `Swarm ${index % 40},Stage ${index},carving,1,`);
     const since = Date.now();
-    const { body } = await send([HEAD, ...rows].join('\n'), 'take');
+    const body = bodyOf(StageImportResult, await send([HEAD, ...rows].join('\n'), 'take'));
     const seconds = (Date.now() - since) / 1000;
     expect(body).toEqual({ pieces: 40, stages: 10_000, faults: [], taken: true });
     expect(await stagesOf('Swarm 7')).toHaveLength(250);
@@ -126,10 +129,9 @@ describe('importing stages', () => {
 });
 
 async function knownNames(manager: Visitor): Promise<{ bay: string; material: string; milestone: string }> {
-  const { body: bays } = await manager.get('/api/bays');
-  const { body: materials } = await manager.get('/api/materials');
-  const material = materials.find((one: { dwells: { milestone: string }[] }) =>
-    one.dwells.some((dwell) => dwell.milestone === 'demould' && MATERIAL_MILESTONES.includes(dwell.milestone)),
-  );
-  return { bay: bays[0].name as string, material: material.name as string, milestone: 'demould' };
+  const [bay] = bodyOf(BayView.array(), await manager.get('/api/bays'));
+  const materials = bodyOf(MaterialView.array(), await manager.get('/api/materials'));
+  const material = materials.find((one) => one.dwells.some((dwell) => dwell.milestone === 'demould'));
+  if (!material) throw new Error('The demo has no material that is demoulded.');
+  return { bay: bay.name, material: material.name, milestone: 'demould' };
 }

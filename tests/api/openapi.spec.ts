@@ -1,4 +1,6 @@
 import type { Router } from 'express';
+import { z } from 'zod';
+import { bodyOf } from './body-of';
 import { withStudio } from './studio';
 
 interface Layer {
@@ -21,8 +23,9 @@ describe('the description of the API', () => {
   const studio = withStudio();
 
   it('tells what is mounted, all of it, and nothing else', async () => {
-    const { body } = await studio.visitor().get('/api/openapi.json');
-    const told = Object.entries(body.paths as Record<string, object>).flatMap(([path, methods]) =>
+    const Paths = z.object({ paths: z.record(z.string(), z.record(z.string(), z.unknown())) });
+    const { paths } = bodyOf(Paths, await studio.visitor().get('/api/openapi.json'));
+    const told = Object.entries(paths).flatMap(([path, methods]) =>
       Object.keys(methods).map((method) => `${method} ${path}`),
     );
     const mounted = mountedRoutes(studio.running.app.router).filter((route) => route.includes(' /api/'));
