@@ -7,8 +7,10 @@ export const PROTOCOL = 1;
 export interface LevelJob {
   readonly protocol: typeof PROTOCOL;
   readonly problem: Problem;
-  /** The plan to even out, or null to level from the start. */
-  readonly within: Plan | null;
+  /** `dates` levels from the start; `within-dates` evens `current` out. */
+  readonly mode: 'dates' | 'within-dates';
+  /** The plan as it stands: what is found is never worse than it. */
+  readonly current: Plan;
   readonly seed: number;
   readonly milliseconds: number;
   readonly cancel: SharedArrayBuffer;

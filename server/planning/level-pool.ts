@@ -9,7 +9,9 @@ import { PROTOCOL, type LevelEnd, type LevelJob, type LevelMessage } from './lev
 /** What is to be levelled. */
 export interface LevelTask {
   readonly problem: Problem;
-  readonly within: Plan | null;
+  readonly mode: 'dates' | 'within-dates';
+  /** The plan as it stands: what is found is never worse than it. */
+  readonly current: Plan;
   readonly seed: number;
   readonly milliseconds: number;
 }

@@ -1,5 +1,15 @@
 import { parentPort } from 'node:worker_threads';
-import { level, levelWithinDates, type LevelOptions } from '@common/planning';
+import {
+  check,
+  isBetter,
+  level,
+  levelWithinDates,
+  measure,
+  type LevelOptions,
+  type LevelResult,
+  type Plan,
+  type Problem,
+} from '@common/planning';
 import { PROTOCOL, type LevelEnd, type LevelJob, type LevelMessage } from './level-message';
 
 /** The share of the time after which the search makes way for evening out, which asks the same clock. */
@@ -15,7 +25,7 @@ function run(job: LevelJob): void {
   const begun = performance.now();
   const flag = new Int32Array(job.cancel);
   let endedBy: LevelEnd = 'search';
-  let searchEnded = job.within !== null;
+  let searchEnded = job.mode === 'within-dates';
   let lastSaid = -Infinity;
   const shouldStop = () => {
     if (Atomics.load(flag, 0) === 1) {
@@ -43,8 +53,17 @@ function run(job: LevelJob): void {
       say({ protocol: PROTOCOL, kind: 'progress', progress });
     },
   };
-  const result = job.within ? levelWithinDates(job.problem, job.within, options) : level(job.problem, options);
-  say({ protocol: PROTOCOL, kind: 'found', result, endedBy });
+  const { problem, current, mode } = job;
+  const found = mode === 'dates' ? level(problem, options) : levelWithinDates(problem, current, options);
+  say({ protocol: PROTOCOL, kind: 'found', result: noWorseThan(problem, current, found), endedBy });
+}
+
+/** What was found, or the plan as it stands where a search from nothing did not come up to it. */
+function noWorseThan(problem: Problem, current: Plan, found: LevelResult): LevelResult {
+  const unmet = check(problem, current);
+  const objective = measure(problem, current, unmet);
+  if (!isBetter(objective, found.objective, problem.weights)) return found;
+  return { ...found, plan: current, objective, unmet, stop: 'nothing-to-improve' };
 }
 
 parentPort?.on('message', (job: LevelJob) => {
