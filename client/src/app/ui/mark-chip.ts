@@ -5,12 +5,11 @@ import { hueColour } from './production-hues';
 @Component({
   selector: 'fettle-mark-chip',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  template: `<span [attr.aria-hidden]="name() ? null : 'true'" [attr.title]="name() || null"
-    >{{ mark() }}
-    @if (name()) {
-      <span class="visually-hidden">, {{ name() }}</span>
-    }
-  </span>`,
+  template: `
+    <span [attr.aria-hidden]="name() ? null : 'true'" [attr.title]="name() || null"
+      >{{ mark() }}<span class="visually-hidden">{{ spoken() }}</span></span
+    >
+  `,
   styles: `
     :host {
       display: inline-grid;
@@ -37,6 +36,7 @@ export class MarkChip {
   /** The production's name, where it does not stand beside the chip. */
   readonly name = input('');
 
+  protected readonly spoken = computed(() => (this.name() === '' ? '' : `, ${this.name()}`));
   protected readonly fill = computed(() => hueColour(this.hue()));
   protected readonly on = computed(() => hueColour(this.hue(), 'on'));
 }
