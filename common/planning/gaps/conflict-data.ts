@@ -13,7 +13,7 @@ export interface ConflictBudget {
 export type LateLimit = 'horizon' | 'latest' | 'fixed' | 'pin' | 'progress';
 
 /**
- * Requirements that cannot all be kept, none of which could be left out: the smallest such set found, as data. `say-unmet`
+ * Requirements that cannot all be kept, none of which could be left out: the smallest such set found, as data. `sayConflict`
  * makes the sentence.
  *
  * - `cycle`: gaps round a ring of stages that ask an instant to be `excessMinutes` after itself.
