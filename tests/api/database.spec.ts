@@ -14,7 +14,6 @@ import {
   Stage,
   WorkingRevision,
 } from '@database/entities';
-import type { QueryFailedError } from 'typeorm';
 import { createLog } from '../../server/http/log';
 import { Transactions } from '../../server/storage/transactions';
 import { withDatabase } from '../support/test-database';
@@ -31,7 +30,7 @@ async function codeOf(statement: Promise<unknown>): Promise<string> {
     await statement;
     return 'none';
   } catch (error) {
-    return (error as QueryFailedError).driverError.code as string;
+    return (error as { driverError: { code: string } }).driverError.code;
   }
 }
 

@@ -37,7 +37,7 @@ describe('who may call what', () => {
       // Signing out would end the session that the next routes need.
       const visitor = name === 'signOut' ? await studio.as(role) : (people.get(role) as Visitor);
       const { status, body } = await knock(visitor, endpoint);
-      const isInvited = endpoint.who === 'anyone' || (endpoint.who as readonly Role[]).includes(role);
+      const isInvited = endpoint.who === 'anyone' || endpoint.who.includes(role);
       if (isInvited) {
         expect(status).not.toBe(401);
         expect(body.type).not.toBe('/problems/not-allowed');
@@ -49,7 +49,7 @@ describe('who may call what', () => {
     });
 
     if (isUnsafe(endpoint)) {
-      const invited = endpoint.who === 'anyone' ? 'owner' : (endpoint.who[0] as Role);
+      const invited = endpoint.who === 'anyone' ? 'owner' : endpoint.who[0];
 
       it('refuses a request without the session’s token', async () => {
         const visitor = await studio.as(invited);
