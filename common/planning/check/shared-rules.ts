@@ -37,7 +37,7 @@ export function checkBayCapacity(facts: Facts): Unmet[] {
     stage?.places.forEach((place, i) => {
       const bayId = placement.bayIds[i];
       const use = { stageId, units: place.units, start: workStart(placement), end: holdEnd(facts, place, placement) };
-      if (use.end > use.start && use.units > 0) usesByBay.set(bayId, [...(usesByBay.get(bayId) ?? []), use]);
+      if (use.end > use.start && use.units > 0) file(usesByBay, bayId, use);
     });
   }
   const found: Unmet[] = [];
@@ -69,10 +69,9 @@ export function checkMakers(facts: Facts): Unmet[] {
     const stage = facts.stages.get(stageId);
     if (!stage) continue;
     for (const makerId of new Set(placement.crew.map((member) => member.makerId))) {
-      const uses = plannedWork(stage, placement)
-        .filter((span) => span.end > span.start)
-        .map((span) => ({ ...span, stageId, units: 1 }));
-      usesByMaker.set(makerId, [...(usesByMaker.get(makerId) ?? []), ...uses]);
+      for (const { start, end } of plannedWork(stage, placement)) {
+        if (end > start) file(usesByMaker, makerId, { start, end, stageId, units: 1 });
+      }
     }
   }
   const found: Unmet[] = [];
@@ -90,16 +89,22 @@ interface Crowd {
   readonly minutes: number;
 }
 
+function file(uses: Map<string, Use[]>, id: string, use: Use): void {
+  const known = uses.get(id);
+  if (known) known.push(use);
+  else uses.set(id, [use]);
+}
+
 /** Sweeps over the instants at which anything changes and gathers each unbroken stretch of too much at once. */
 function findCrowds(uses: readonly Use[], capacity: number, begun: (stageId: string) => boolean): Crowd[] {
   const instants = [...new Set(uses.flatMap((use) => [use.start, use.end]))].sort((a, b) => a - b);
   const starts = [...uses].sort((a, b) => a.start - b.start);
   const crowds: { stageIds: Set<string>; by: number; minutes: number }[] = [];
-  let active: Use[] = [];
+  const active: Use[] = [];
   let next = 0;
   let crowded = false;
   instants.forEach((instant, i) => {
-    active = active.filter((use) => use.end > instant);
+    for (let k = active.length - 1; k >= 0; k -= 1) if (active[k].end <= instant) active.splice(k, 1);
     while (next < starts.length && starts[next].start <= instant) active.push(starts[next++]);
     const over = active.reduce((sum, use) => sum + use.units, 0) - capacity;
     if (over <= 0 || active.every((use) => begun(use.stageId))) {

@@ -27,6 +27,7 @@ export function chooseCrews(
     return row;
   });
   const known = new Map<string, Crew[]>();
+  let count = 0;
   return stages.map((stage) => {
     const given = givenMakers(stage);
     const key = JSON.stringify([stage.crew, stage.crewLossPermille, given]);
@@ -47,7 +48,10 @@ export function chooseCrews(
         ]
       : combine(needs, paces);
     const crews = teams.map((team) => toCrew(stage.crewLossPermille, team, paces, tension, calendars.hourCost));
-    const chosen = thin(crews.filter((crew) => crew.outputPermille > 0 || given !== null));
+    const chosen = thin(crews.filter((crew) => crew.outputPermille > 0 || given !== null)).map((crew) => ({
+      ...crew,
+      index: count++,
+    }));
     known.set(key, chosen);
     return chosen;
   });
@@ -144,6 +148,7 @@ function toCrew(
     regret += scarcest;
   }
   return {
+    index: -1,
     makers: Int32Array.from(team, ([maker]) => maker),
     crafts: Int32Array.from(team, ([, craft]) => craft),
     outputPermille: team.reduce((sum, [maker, craft]) => sum + (craft === NO_CRAFT ? 0 : paces[maker][craft]), -loss),

@@ -90,6 +90,8 @@ export const ROOM = -1;
 
 /** Makers who could do a stage together; one object may serve many stages. */
 export interface Crew {
+  /** Its place among all crews of a compiled problem; -1 for one made for a single occasion. */
+  readonly index: number;
   readonly makers: Int32Array;
   readonly crafts: Int32Array;
   /** What they get done together, in permille of one usual maker; 0 or less for nothing. */

@@ -2,6 +2,7 @@ import { type Calendar, NEVER } from './calendar';
 import { CLOCK, type Compiled, type Crew, FREE, HOLD_DWELL, HOLD_UNTIL, SESSION } from './compiled';
 import { curedBy } from './cured-by';
 import { type Fit, type Layout, pushSpan } from './layout';
+import { ReadyTimes } from './ready-times';
 
 /** A `free` stage is not split into pieces shorter than this, but for its last. In minutes. */
 const LEAST_PIECE = 30;
@@ -32,6 +33,7 @@ export type Leniency = 'none' | 'bays' | 'other-work' | 'calendars';
  */
 export class Fitter {
   leniency: Leniency = 'none';
+  private readonly ready = new ReadyTimes();
   private readonly compiled: Compiled;
   private calendars: (Calendar | null)[] = [];
   private calendarCount = 0;
@@ -62,6 +64,12 @@ export class Fitter {
       t = Math.max(retry, this.from + 1);
     }
     return false;
+  }
+
+  /** The crew's index where what is known of its free time applies to the ask; else -1. */
+  private crewKnown(ask: Ask): number {
+    if (!ask.crew || ask.overtime || this.leniency !== 'none' || ask.minutes === 0 || ask.minutes >= NEVER) return -1;
+    return this.compiled.work.continuity[ask.stage] === CLOCK ? -1 : ask.crew.index;
   }
 
   /** When a stage's dwell would end after work that ends at an instant, where it is housed. */
@@ -119,6 +127,22 @@ export class Fitter {
     return retry;
   }
 
+  /** The first instant from `low` on at which bays have room for a stage to begin and work for at least so many minutes. */
+  bayFreeFrom(stage: number, housing: Int32Array, minutes: number, low: number): number {
+    const { placeOf, placeUnits } = this.compiled.work;
+    let t = low;
+    for (let settled = false; !settled && t < NEVER;) {
+      settled = true;
+      for (let k = 0; k < housing.length; k += 1) {
+        const until = this.layout.bays[housing[k]].clashEnd(t, t + minutes, placeUnits[placeOf[stage] + k]);
+        if (until <= t) continue;
+        t = until;
+        settled = false;
+      }
+    }
+    return t;
+  }
+
   private calendarOf(maker: number, overtime: boolean): Calendar {
     const { ordinary, extended } = this.compiled.makers;
     return overtime ? extended[maker] : ordinary[maker];
@@ -168,15 +192,17 @@ export class Fitter {
     return true;
   }
 
-  /** The end of a booking of the crew that meets a stretch; -1 where none does. */
+  /** The end of the longest-lasting booking of the crew that meets a stretch; -1 where none does. */
   private bookingOver(ask: Ask, start: number, end: number): number {
     if (!ask.crew || this.leniency === 'other-work' || this.leniency === 'calendars') return -1;
-    for (const maker of ask.crew.makers) {
-      const bookings = this.layout.bookings[maker];
+    const { makers } = ask.crew;
+    let until = -1;
+    for (let k = 0; k < makers.length; k += 1) {
+      const bookings = this.layout.bookings[makers[k]];
       const i = bookings.indexAt(start);
-      if (i < bookings.count && bookings.starts[i] < end) return bookings.ends[i];
+      if (i < bookings.count && bookings.starts[i] < end && bookings.ends[i] > until) until = bookings.ends[i];
     }
-    return -1;
+    return until;
   }
 
   private buildShifts(ask: Ask, from: number, out: Fit): boolean {

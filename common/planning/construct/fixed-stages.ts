@@ -71,6 +71,7 @@ function placeFrozen(layout: Layout, fitter: Fitter, stage: number): void {
     .map((member) => [compiled.makerIds.indexOf(member.makerId), compiled.craftIds.indexOf(member.craftId)])
     .filter(([maker]) => maker >= 0);
   const crew: Crew = {
+    index: -1,
     makers: Int32Array.from(seats, ([maker]) => maker),
     crafts: Int32Array.from(seats, ([, craft]) => craft),
     outputPermille: 1000,

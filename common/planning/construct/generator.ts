@@ -7,6 +7,8 @@ import type { Genome } from './genome';
 import { copyFit, type Fit, Layout, newFit } from './layout';
 import { workMinutes } from './work-minutes';
 
+/** Stages laid out between two looks at whether to give up. */
+const STAGES_BETWEEN_LOOKS = 64;
 /** A maximum gap is mended this often for one stage before it is let go. */
 const MOST_MENDS_OF_STAGE = 8;
 
@@ -19,6 +21,10 @@ export class Generator {
   readonly layout: Layout;
   /** Requirements that the last decoding could not meet, stages without a place among them. */
   broken = 0;
+  /** Whether the last decoding was given up half way; its layout is then worth nothing. */
+  isGivenUp = false;
+  /** Asked now and then within a decoding, so that a large one need not be waited for. */
+  shouldGiveUp: () => boolean = () => false;
 
   private readonly fitter: Fitter;
   private readonly bounds: StageBounds;
@@ -81,8 +87,15 @@ export class Generator {
     this.isBusy.fill(0);
     this.isHopeless.fill(0);
     this.mendsLeft = 2 * order.length + 20;
+    this.isGivenUp = false;
+    let looks = 0;
     for (let p = 0; p < order.length; p += 1) this.position[order[p]] = p;
     for (let p = 0; p < order.length; p += 1) {
+      looks += 1;
+      if (looks % STAGES_BETWEEN_LOOKS === 0 && this.shouldGiveUp()) {
+        this.isGivenUp = true;
+        return;
+      }
       this.resumeAt = NEVER;
       this.placeWithBefore(order[p]);
       // A mend has taken stages out: go back to the first of them. The loop's own step makes up for the one subtracted.
@@ -156,17 +169,23 @@ export class Generator {
     const ask = this.ask;
     ask.stage = stage;
     ask.overtime = this.genome !== null && this.genome.overtime[stage] === 1;
+    if (needsCrew && crews.length === 0) return -1;
     let bestLate = NEVER;
     let bestScore = NEVER;
+    const fewest = this.fewestMinutes(stage, crews);
+    const { lowStart } = this.bounds;
     for (const housing of work.housings[stage]) {
       ask.housing = housing;
+      // No crew can start before its bays have room for even the quickest work.
+      this.bounds.lowStart = this.fitter.bayFreeFrom(stage, housing, fewest, lowStart);
       for (let c = 0; c < Math.max(1, crews.length); c += 1) {
         if (choice >= 0 && c !== choice && choice < crews.length) continue;
         const crew = c < crews.length ? crews[c] : null;
-        if (!crew && needsCrew) return -1;
         ask.crew = crew;
-        ask.lastStart = bestLate === 0 ? bestScore : NEVER;
-        if (!this.fitInTime(ask)) continue;
+        const least = workMinutes(this.compiled, stage, work.minutes[stage], crew);
+        // A start from which even bare work ends no better than the best found is of no use.
+        ask.lastStart = bestLate === 0 ? bestScore - least - regretMinutes(crew, least) - 1 : NEVER;
+        if (ask.lastStart < this.bounds.lowStart || !this.fitInTime(ask)) continue;
         const late = this.lateness(this.trial);
         const score = this.trial.finish + regretMinutes(crew, ask.minutes);
         if (late > bestLate || (late === bestLate && score >= bestScore)) continue;
@@ -177,7 +196,16 @@ export class Generator {
         this.bestHousing = housing;
       }
     }
+    this.bounds.lowStart = lowStart;
     return bestScore >= NEVER ? -1 : bestLate;
+  }
+
+  private fewestMinutes(stage: number, crews: readonly Crew[]): number {
+    const effort = this.compiled.work.minutes[stage];
+    let fewest = crews.length === 0 ? effort : NEVER;
+    for (let c = 0; c < crews.length; c += 1)
+      fewest = Math.min(fewest, workMinutes(this.compiled, stage, effort, crews[c]));
+    return fewest;
   }
 
   /** Fits with the extra effort of every soft window that the start then misses. */

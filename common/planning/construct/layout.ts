@@ -66,6 +66,8 @@ export class Layout {
   readonly spanAt: Int32Array;
   readonly spanCount: Int32Array;
   spanPool = new Int32Array(1024);
+  /** Grows whenever something is taken out: while it stands still, bookings have only been added. Never 0. */
+  version = 1;
   private poolUsed = 0;
   /** How many spans each stage's part of the pool has room for since it was last cleared. */
   private readonly spanRoom: Int32Array;
@@ -98,6 +100,7 @@ export class Layout {
     for (const booking of this.bookings) booking.clear();
     for (const bay of this.bays) bay.clear();
     for (const holds of this.openHolds) holds.length = 0;
+    this.version += 1;
     this.poolUsed = 0;
     this.spanRoom.fill(0);
   }
@@ -121,6 +124,7 @@ export class Layout {
   unplace(stage: number): void {
     const crew = this.crew[stage];
     const housing = this.housing[stage];
+    this.version += 1;
     if (crew) this.unbook(stage, crew);
     if (housing) this.releaseBays(stage, housing);
     this.isPlaced[stage] = 0;

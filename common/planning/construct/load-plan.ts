@@ -48,6 +48,7 @@ function crewOf(compiled: Compiled, stage: number, placement: Placement): Crew |
     output += held?.pacePermille ?? 0;
   }
   return {
+    index: -1,
     makers: Int32Array.from(seats, ([maker]) => maker),
     crafts: Int32Array.from(seats, ([, craft]) => craft),
     outputPermille: output,

@@ -1,5 +1,4 @@
 import { StageBounds } from '../construct/bounds-of-stage';
-import { NEVER } from '../construct/calendar';
 import { type Crew, FINISH_START, MOVABLE, SOFT_WINDOW } from '../construct/compiled';
 import { type Ask, Fitter } from '../construct/fitter';
 import { copyFit, type Fit, type Layout, newFit } from '../construct/layout';
@@ -114,7 +113,10 @@ class Evener {
     const { compiled } = this.layout;
     const isFree = (one: Crew): boolean => one.makers.every((maker) => compiled.makers.hourCost[maker] === 0);
     const same = (one: Crew): boolean =>
-      one !== crew && one.outputPermille === crew.outputPermille && one.makers.length === crew.makers.length && isFree(one);
+      one !== crew &&
+      one.outputPermille === crew.outputPermille &&
+      one.makers.length === crew.makers.length &&
+      isFree(one);
     const others = compiled.work.crews[stage].filter(same);
     const from = others.length > 0 ? this.chance.below(others.length) : 0;
     return [crew, ...others.slice(from), ...others.slice(0, from)].slice(0, 1 + MOST_CREWS);
@@ -141,12 +143,23 @@ class Evener {
     bounds.gather(stage, 0);
     if (bounds.softUntil.some((until) => was.start > until) || this.isPaidFor(stage)) return null;
     bounds.hardenWindows();
-    const isAmiss = was.start < bounds.lowStart || was.end < bounds.lowEnd || was.finish < bounds.lowFinish || !this.isAllowed(was, stage);
+    const isAmiss =
+      was.start < bounds.lowStart ||
+      was.end < bounds.lowEnd ||
+      was.finish < bounds.lowFinish ||
+      !this.isAllowed(was, stage);
     if (isAmiss) return null;
     const minutes = workMinutes(layout.compiled, stage, layout.compiled.work.minutes[stage], layout.crew[stage]);
     return {
-      stage, crew: null, housing: null, minutes, overtime: false,
-      lowStart: bounds.lowStart, lowEnd: bounds.lowEnd, lowFinish: bounds.lowFinish, lastStart: bounds.highStart,
+      stage,
+      crew: null,
+      housing: null,
+      minutes,
+      overtime: false,
+      lowStart: bounds.lowStart,
+      lowEnd: bounds.lowEnd,
+      lowFinish: bounds.lowFinish,
+      lastStart: bounds.highStart,
     };
   }
 
@@ -213,7 +226,8 @@ class Evener {
     const productionEnd = new Float64Array(dates.productionCount);
     for (let stage = 0; stage < stageCount; stage += 1) {
       const production = dates.productionOf[stage];
-      if (layout.isPlaced[stage] === 1) productionEnd[production] = Math.max(productionEnd[production], layout.finish[stage]);
+      if (layout.isPlaced[stage] === 1)
+        productionEnd[production] = Math.max(productionEnd[production], layout.finish[stage]);
     }
     const limit = new Float64Array(stageCount).fill(Infinity);
     for (let date = 0; date < dates.count; date += 1) {
@@ -223,7 +237,8 @@ class Evener {
       for (const stage of dates.stages[date]) limit[stage] = Math.min(limit[stage], latest);
     }
     for (let stage = 0; stage < stageCount; stage += 1) {
-      if (limit[stage] === Infinity) limit[stage] = Math.max(productionEnd[dates.productionOf[stage]], layout.finish[stage]);
+      if (limit[stage] === Infinity)
+        limit[stage] = Math.max(productionEnd[dates.productionOf[stage]], layout.finish[stage]);
     }
     // A stage before a date's own may end as late as links allow: its followers hold it back.
     return this.widenBeforeDates(limit);
@@ -252,7 +267,8 @@ function stagesAsIssued(layout: Layout): Uint8Array {
   for (const placement of issued?.placements ?? []) {
     const stage = compiled.stageIndex.get(placement.stageId);
     const start = placement.work[0]?.start;
-    if (stage !== undefined && start !== undefined && layout.start[stage] === start - compiled.origin) settled[stage] = 1;
+    if (stage !== undefined && start !== undefined && layout.start[stage] === start - compiled.origin)
+      settled[stage] = 1;
   }
   return settled;
 }

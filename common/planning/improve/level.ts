@@ -42,18 +42,21 @@ function levelBySearch(problem: Problem, options: LevelOptions): LevelResult {
   let bound: LevelResult['bound'] = noBound();
   const tell = (): void => {
     if (!options.onProgress) return;
-    const plan = toPlan(search.generator.layout);
+    const plan = toPlan(search.bestLayout);
     const objective = measure(problem, plan, []);
-    options.onProgress({ schedules: searchBudget.schedules, objective: { ...objective, unplaced: search.bestScore[0] }, bound });
+    options.onProgress({
+      schedules: searchBudget.schedules,
+      objective: { ...objective, unplaced: search.bestScore[0] },
+      bound,
+    });
   };
   const search = new StudioSearch(compiled, estimate(compiled), searchBudget, options.seed, tell);
   search.construct();
   bound = lowerBound(problem);
   search.improve();
-  search.layOutBest();
   const budget = new Budget(Math.max(0, options.maxSchedules - searchBudget.schedules), options.shouldStop);
-  evenOut(search.generator.layout, budget, options.seed);
-  const plan = toPlan(search.generator.layout);
+  evenOut(search.bestLayout, budget, options.seed);
+  const plan = toPlan(search.bestLayout);
   return { ...finish(problem, plan, searchBudget.schedules + budget.schedules, searchBudget.stop), bound };
 }
 
@@ -65,5 +68,13 @@ export function finish(problem: Problem, plan: Plan, schedules: number, stop: Le
 
 /** No part bounded. */
 export function noBound(): { [Part in keyof Objective]: number | null } {
-  return { unplaced: null, hardLateness: null, wishedLateness: null, costMinor: null, unevenness: null, changes: null, finishSum: null };
+  return {
+    unplaced: null,
+    hardLateness: null,
+    wishedLateness: null,
+    costMinor: null,
+    unevenness: null,
+    changes: null,
+    finishSum: null,
+  };
 }

@@ -55,10 +55,16 @@ function crewsFor(compiled: Compiled, stage: number, makerIds: readonly string[]
   const craft = compiled.work.needCraft[compiled.work.needOf[stage]] ?? -1;
   const makers = makerIds.map((id) => compiled.makerIds.indexOf(id)).filter((maker) => maker >= 0);
   const crafts = Int32Array.from(makers, () => craft);
-  return [{ makers: Int32Array.from(makers), crafts, outputPermille: 1000 * makers.length, regretPermille: 0 }];
+  return [
+    { index: -1, makers: Int32Array.from(makers), crafts, outputPermille: 1000 * makers.length, regretPermille: 0 },
+  ];
 }
 
-function housingsFor(compiled: Compiled, stage: number, bayIds: readonly string[] | null): readonly Int32Array[] | null {
+function housingsFor(
+  compiled: Compiled,
+  stage: number,
+  bayIds: readonly string[] | null,
+): readonly Int32Array[] | null {
   const places = compiled.work.placeOf[stage + 1] - compiled.work.placeOf[stage];
   if (bayIds === null || bayIds.length !== places) return null;
   return [Int32Array.from(bayIds, (id) => compiled.bayIds.indexOf(id))];
@@ -78,16 +84,18 @@ function movedStages(before: Plan, after: Plan): string[] {
   const was = new Map(before.placements.map((placement) => [placement.stageId, placement]));
   const differs = (placement: Placement): boolean => {
     const old = was.get(placement.stageId);
-    return old === undefined || signature(old) !== signature(placement);
+    return old === undefined || !isSame(old, placement);
   };
   return after.placements.filter(differs).map((placement) => placement.stageId);
 }
 
-function signature(placement: Placement): string {
-  const work = placement.work.map((span) => `${span.start}-${span.end}`).join(' ');
-  const crew = placement.crew
-    .map((member) => `${member.makerId} ${member.craftId}`)
-    .sort()
-    .join(',');
-  return [work, crew, placement.bayIds.join(','), placement.dwellEnd].join('|');
+function isSame(a: Placement, b: Placement): boolean {
+  return (
+    a.dwellEnd === b.dwellEnd &&
+    a.work.length === b.work.length &&
+    a.crew.length === b.crew.length &&
+    a.bayIds.every((id, k) => id === b.bayIds[k]) &&
+    a.work.every((span, k) => span.start === b.work[k].start && span.end === b.work[k].end) &&
+    a.crew.every((one) => b.crew.some((other) => other.makerId === one.makerId && other.craftId === one.craftId))
+  );
 }

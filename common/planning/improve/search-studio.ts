@@ -2,6 +2,7 @@ import type { Compiled } from '../construct/compiled';
 import { type Estimate } from '../construct/estimate';
 import { copyGenome, type Genome, genomeOf } from '../construct/genome';
 import { Generator } from '../construct/generator';
+import type { Layout } from '../construct/layout';
 import { orderBy, PRIORITY_RULES } from '../construct/priority-rules';
 import type { Budget } from '../stop/budget';
 import { Chance } from './chance';
@@ -21,13 +22,23 @@ const HISTORY = 40;
 const PATIENCE = 1500;
 
 const OPERATORS: readonly Operator[] = [
-  pullLateStage, pullLateStage, pullLateStage, favourProduction, shuffleWindow, swapNeighbours, changeCrew, changeCrew, toggleOvertime,
+  pullLateStage,
+  pullLateStage,
+  pullLateStage,
+  favourProduction,
+  shuffleWindow,
+  swapNeighbours,
+  changeCrew,
+  changeCrew,
+  toggleOvertime,
 ];
 
 /** A search over genomes of a studio; keeps the best that it has met. */
 export class StudioSearch {
-  readonly generator: Generator;
   readonly best: Genome;
+  /** Lays out what is tried; once something is the best it changes places with the other, which then keeps it. */
+  private generator: Generator;
+  private keeper: Generator;
   readonly bestScore: Score = new Float64Array(SCORE_PARTS).fill(Infinity);
   private readonly scorer: Scorer;
   private readonly score: Score = new Float64Array(SCORE_PARTS);
@@ -45,6 +56,7 @@ export class StudioSearch {
     private readonly onBetter: () => void,
   ) {
     this.generator = new Generator(compiled);
+    this.keeper = new Generator(compiled);
     this.scorer = new Scorer(compiled);
     this.chance = new Chance(seed);
     this.currentStart = new Int32Array(compiled.stageCount);
@@ -74,7 +86,12 @@ export class StudioSearch {
     for (let step = 0; !this.budget.isSpent(); step += 1) {
       const candidate = copyGenome(this.current);
       const operator = OPERATORS[this.chance.below(OPERATORS.length)];
-      operator(candidate, { compiled: this.compiled, chance: this.chance, start: this.currentStart, late: this.currentLate });
+      operator(candidate, {
+        compiled: this.compiled,
+        chance: this.chance,
+        start: this.currentStart,
+        late: this.currentLate,
+      });
       const slot = step % HISTORY;
       const isBest = this.tryGenome(candidate, 'if-no-worse', history[slot]);
       history[slot].set(this.currentScore);
@@ -86,15 +103,20 @@ export class StudioSearch {
     }
   }
 
-  /** Lays the best genome out again. */
-  layOutBest(): void {
-    this.generator.decode(this.best);
+  /** The best schedule, laid out. */
+  get bestLayout(): Layout {
+    return this.keeper.layout;
   }
 
   /** Decodes; takes the genome as current always, or where it is no worse than the current or a yardstick; true for a new best. */
   private tryGenome(genome: Genome, take: 'always' | 'if-no-worse', yardstick: Score = this.currentScore): boolean {
     this.generator.decode(genome);
+    if (this.generator.isGivenUp) return false;
     this.budget.spend();
+    // One schedule is owed whatever happens; any further one may be given up.
+    const giveUp = (): boolean => this.budget.isStopped();
+    this.generator.shouldGiveUp = giveUp;
+    this.keeper.shouldGiveUp = giveUp;
     this.scorer.score(this.generator, this.score);
     const isBest = compareScores(this.score, this.bestScore) < 0;
     const isNoWorse = compareScores(this.score, this.currentScore) <= 0 || compareScores(this.score, yardstick) <= 0;
@@ -103,10 +125,13 @@ export class StudioSearch {
       this.best.order.set(genome.order);
       this.best.crewChoice.set(genome.crewChoice);
       this.best.overtime.set(genome.overtime);
-      this.onBetter();
     }
     // Only now: taking a genome reorders it.
     if (take === 'always' || isNoWorse) this.take(genome);
+    if (isBest) {
+      [this.generator, this.keeper] = [this.keeper, this.generator];
+      this.onBetter();
+    }
     return isBest;
   }
 
@@ -118,7 +143,8 @@ export class StudioSearch {
     this.currentLate = findLate(this.compiled, layout);
     const rank = new Int32Array(this.compiled.stageCount);
     genome.order.forEach((stage, p) => (rank[stage] = p));
-    const start = (stage: number): number => (layout.isPlaced[stage] === 1 ? layout.start[stage] : this.compiled.horizonMinutes);
+    const start = (stage: number): number =>
+      layout.isPlaced[stage] === 1 ? layout.start[stage] : this.compiled.horizonMinutes;
     genome.order.sort((a, b) => start(a) - start(b) || rank[a] - rank[b]);
     this.current = genome;
   }
@@ -133,7 +159,8 @@ export class StudioSearch {
     const keys = this.estimate.latestStart.slice();
     for (const placement of issued.placements) {
       const stage = this.compiled.stageIndex.get(placement.stageId);
-      if (stage !== undefined && placement.work.length > 0) keys[stage] = placement.work[0].start - this.compiled.origin;
+      if (stage !== undefined && placement.work.length > 0)
+        keys[stage] = placement.work[0].start - this.compiled.origin;
     }
     return keys;
   }

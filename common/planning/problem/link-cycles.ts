@@ -1,4 +1,4 @@
-import { fastestRates, leastDwellMinutes, leastWorkMinutes } from './least-minutes';
+import { fastestRates, heldPaces, leastDwellMinutes, leastWorkMinutes } from './least-minutes';
 import type { Problem } from './problem';
 
 /** Stages whose links chase one another round, and the minutes by which a round trip comes out too long. */
@@ -29,7 +29,9 @@ export function findLinkCycles(problem: Problem): LinkCycle[] {
     if (round === null) break;
     const stageIds = round.map((edge) => problem.stages[Math.floor(edge.from / 3)].id);
     cycles.push({
-      stageIds: stageIds.filter((id, i) => id !== stageIds[(i + stageIds.length - 1) % stageIds.length] || stageIds.length === 1),
+      stageIds: stageIds.filter(
+        (id, i) => id !== stageIds[(i + stageIds.length - 1) % stageIds.length] || stageIds.length === 1,
+      ),
       byMinutes: round.reduce((sum, edge) => sum + edge.minutes, 0),
     });
     const cut = round.find((edge) => Math.floor(edge.from / 3) !== Math.floor(edge.to / 3)) ?? round[0];
@@ -41,9 +43,10 @@ export function findLinkCycles(problem: Problem): LinkCycle[] {
 function collectEdges(problem: Problem): Edge[] {
   const edges: Edge[] = [];
   const fastest = fastestRates(problem.advances);
+  const held = heldPaces(problem.makers);
   const index = new Map(problem.stages.map((stage, i) => [stage.id, i]));
   problem.stages.forEach((stage, i) => {
-    const work = leastWorkMinutes(stage, problem.makers);
+    const work = leastWorkMinutes(stage, held);
     const dwell = leastDwellMinutes(stage, fastest);
     const finite = Number.isFinite(work) ? work : 0;
     edges.push({ from: 3 * i, to: 3 * i + 1, minutes: finite }, { from: 3 * i + 1, to: 3 * i + 2, minutes: dwell });
@@ -61,7 +64,8 @@ function collectEdges(problem: Problem): Edge[] {
     const from = 3 * a + (link.kind.startsWith('start') ? 0 : link.after === 'work' ? 1 : 2);
     const to = 3 * b + (link.kind.endsWith('start') ? 0 : 1);
     if (link.time === 'clock' || link.minGapMinutes >= 0) edges.push({ from, to, minutes: link.minGapMinutes });
-    if (link.maxGapMinutes !== null && link.time === 'clock') edges.push({ from: to, to: from, minutes: -link.maxGapMinutes });
+    if (link.maxGapMinutes !== null && link.time === 'clock')
+      edges.push({ from: to, to: from, minutes: -link.maxGapMinutes });
   }
   return edges;
 }

@@ -1,11 +1,12 @@
 import type { Span } from '../../time/span';
 import type { Fault } from './fault';
-import { leastWorkMinutes } from './least-minutes';
+import { heldPaces, type HeldPaces, leastWorkMinutes } from './least-minutes';
 import type { Maker, Problem, Stage } from './problem';
 
 /** Stages that nobody could do: no craft, too few hands, no shift long enough; and makers whose shifts break their own limits. */
 export function findWorkFaults(problem: Problem): Fault[] {
   const faults: Fault[] = [];
+  const held = heldPaces(problem.makers);
   const orphans = new Map<string, string[]>();
   for (const stage of problem.stages) {
     if (stage.progress.kind === 'finished') continue;
@@ -16,11 +17,12 @@ export function findWorkFaults(problem: Problem): Fault[] {
         faults.push({ kind: 'too-few-hands', stageId: stage.id, craftId: need.craftId, least: need.least, holders });
       }
     }
-    if (stage.continuity === 'clock' && stage.crew.length > 0) faults.push({ kind: 'crew-on-clock', stageId: stage.id });
+    if (stage.continuity === 'clock' && stage.crew.length > 0)
+      faults.push({ kind: 'crew-on-clock', stageId: stage.id });
     if ((stage.dwell?.attendedMinutes ?? 0) > 0 && stage.crew.length === 0) {
       faults.push({ kind: 'attended-by-nobody', stageId: stage.id });
     }
-    faults.push(...sessionFaults(stage, problem.makers), ...windowFaults(stage));
+    faults.push(...sessionFaults(stage, problem.makers, held), ...windowFaults(stage));
   }
   for (const [craftId, stageIds] of orphans) faults.push({ kind: 'craft-nobody-holds', craftId, stageIds });
   for (const link of problem.links) {
@@ -37,10 +39,10 @@ function holds(maker: Maker, craftId: string): boolean {
 }
 
 /** A session has to fit a shift of somebody for each of its crafts, even with the quickest crew that could be. */
-function sessionFaults(stage: Stage, makers: readonly Maker[]): Fault[] {
+function sessionFaults(stage: Stage, makers: readonly Maker[], held: HeldPaces): Fault[] {
   if (stage.continuity !== 'session' || stage.crew.length === 0) return [];
   // Whoever stays on while it sets does so in the same shift, which a session does not leave.
-  const minutes = leastWorkMinutes(stage, makers) + (stage.dwell?.attendedMinutes ?? 0);
+  const minutes = leastWorkMinutes(stage, held) + (stage.dwell?.attendedMinutes ?? 0);
   if (!Number.isFinite(minutes)) return [];
   const longest = stage.crew.map((need) => {
     const eligible = makers.filter((maker) => holds(maker, need.craftId));
@@ -89,7 +91,8 @@ function limitFaults(problem: Problem, maker: Maker): Fault[] {
     }
     endBefore = ends;
     week += minutes;
-    if (minutes > dayMinutes || week > weekMinutes) return [{ kind: 'shifts-break-limits', makerId: maker.id, day: day.day }];
+    if (minutes > dayMinutes || week > weekMinutes)
+      return [{ kind: 'shifts-break-limits', makerId: maker.id, day: day.day }];
   }
   return [];
 }

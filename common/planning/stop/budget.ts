@@ -24,6 +24,12 @@ export class Budget {
     return this.reason !== null;
   }
 
+  /** Whether the caller wants the search to end, whatever is left to spend. */
+  isStopped(): boolean {
+    if (this.reason === null && this.shouldStop()) this.reason = 'cancelled';
+    return this.reason === 'cancelled';
+  }
+
   /** Ends the search for a reason of its own. */
   finish(reason: 'proven-best' | 'nothing-to-improve'): void {
     this.reason ??= reason;
