@@ -37,11 +37,15 @@ interface Turns {
   readonly exactGrowth: number;
 }
 
-/** The fewer the stages, the more exact search is worth; with many it only proves what is proved soon. */
-function turnsFor(stages: number): Turns {
+/**
+ * The fewer the stages, the more exact search is worth; with many it only proves what is proved soon. A small budget is shared
+ * out, so that both get a turn (shares found by trying on PSPLIB's sets).
+ */
+function turnsFor(stages: number, maxSchedules: number): Turns {
+  const share = (permille: number): number => Math.max(1, Math.floor((maxSchedules * permille) / 1000));
   if (stages <= 40) return { quick: 250, exact: 5000, quickGrowth: 2, exactGrowth: 2 };
-  if (stages <= 100) return { quick: 3000, exact: 2000, quickGrowth: 2, exactGrowth: 2 };
-  return { quick: 10_000, exact: 500, quickGrowth: 8, exactGrowth: 1 };
+  if (stages <= 100) return { quick: Math.min(3000, share(600)), exact: 2000, quickGrowth: 2, exactGrowth: 2 };
+  return { quick: Math.min(10_000, share(800)), exact: 1000, quickGrowth: 8, exactGrowth: 1 };
 }
 
 /**
@@ -50,7 +54,7 @@ function turnsFor(stages: number): Turns {
  * A conflict counts as a schedule.
  */
 export function alternate(model: TimedModel, quick: QuickSearch, options: AlternateOptions): AlternateResult {
-  const turns = turnsFor(model.durations.length);
+  const turns = turnsFor(model.durations.length, options.maxSchedules);
   let quickTurn = turns.quick;
   let exactTurn = turns.exact;
   let best: TimedSchedule | null = null;

@@ -37,7 +37,7 @@ export function levelExactly(
     end: end === 'infeasible' && makespan !== null ? 'proved' : end,
     makespan,
     lowerBound: solver.lowerBound,
-    schedules: solver.conflicts + (best === null ? 0 : 1),
+    schedules: Math.max(1, solver.conflicts),
     isStopped,
   });
 }
