@@ -61,13 +61,15 @@ export class TimedSearch {
   }
 
   run(): void {
+    const { count } = this.problem;
+    const patience = Math.max(PATIENCE, count >> 1);
     while (!this.isOver()) {
       this.found();
       let from = this.forward;
       let to = this.backward;
       let idle = 0;
-      for (let last = this.populationBest(from); !this.isOver() && idle < PATIENCE; ) {
-        this.generation(from, to, Math.min(1, LEAST_SHAKEN + idle * SHAKEN_MORE));
+      for (let last = this.populationBest(from); !this.isOver() && idle < patience; ) {
+        this.generation(from, to, Math.min(1, LEAST_SHAKEN + (idle * SHAKEN_MORE) / count ** 2));
         [from, to] = [to, from];
         const now = this.populationBest(from);
         idle = now < last ? 0 : idle + 1;
@@ -185,8 +187,9 @@ export class TimedSearch {
 /** Children that each member has in one generation; the best of them stays. */
 const CHILDREN = 2;
 
-/** The share of children that chance shakes, and how much more with each generation that has brought nothing. */
+/** The share of children that chance shakes. It grows with each generation that has brought nothing, the more the fewer the stages. */
 const LEAST_SHAKEN = 0.1;
-const SHAKEN_MORE = 0.05;
-/** Generations without gain after which the search begins anew. */
+/** The growth of that share, times the number of stages squared. */
+const SHAKEN_MORE = 45;
+/** Fewest generations without gain after which the search begins anew; half the number of stages where that is more. */
 const PATIENCE = 12;
