@@ -39,9 +39,7 @@ export class DaySheetPage {
   protected readonly whose = new FormControl<string | null>(null);
   private readonly makers = readEndpoint(endpoints.listMakers, () => (this.isOffice ? {} : undefined));
   protected readonly makerChoices = computed(() =>
-    (this.makers.value() ?? [])
-      .filter((one) => one.active)
-      .map((one) => ({ value: one.id as string | null, label: one.name })),
+    (this.makers.value() ?? []).filter((one) => one.active).map((one) => ({ value: one.id, label: one.name })),
   );
   protected readonly shownName = computed(() => {
     const day = this.store.day();

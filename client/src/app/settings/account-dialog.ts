@@ -99,10 +99,10 @@ export class AccountDialog {
   });
   protected readonly written = toSignal(this.form.valueChanges, { initialValue: this.form.value });
   protected readonly makerChoices = computed(() =>
-    (this.makers.value() ?? []).map((maker) => ({ value: maker.id as string | null, label: maker.name })),
+    (this.makers.value() ?? []).map((maker) => ({ value: maker.id, label: maker.name })),
   );
   protected readonly clientChoices = computed(() =>
-    (this.clients.value() ?? []).map((client) => ({ value: client.id as string | null, label: client.name })),
+    (this.clients.value() ?? []).map((client) => ({ value: client.id, label: client.name })),
   );
 
   protected async submit(): Promise<void> {

@@ -23,6 +23,7 @@ import { hueColour } from './production-hues';
       letter-spacing: 0.03em;
       line-height: 1;
       vertical-align: 0.08em;
+      margin-inline-end: 0.4em;
       print-color-adjust: exact;
     }
   `,

@@ -32,7 +32,6 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
     }
     h1 {
       display: flex;
-      gap: 0.4em;
       align-items: center;
       overflow-wrap: anywhere;
     }

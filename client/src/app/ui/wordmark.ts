@@ -20,9 +20,9 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
     .trued::after {
       content: '';
       position: absolute;
-      inset-inline: -0.14em -0.1em;
-      top: 0.43em;
-      height: 0.1em;
+      inset-inline: 0 -0.02em;
+      top: 0.395em;
+      height: 0.146em;
       background: var(--oxide);
     }
   `,

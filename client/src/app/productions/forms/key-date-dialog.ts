@@ -77,10 +77,10 @@ export class KeyDateDialog {
   private readonly at = this.data.keyDate ? toDayAndTime(this.data.keyDate.at, this.zone) : { day: '', time: '10:00' };
 
   protected readonly form = inject(NonNullableFormBuilder).group({
-    kind: [this.data.keyDate?.kind ?? ('delivery' as KeyDateView['kind'])],
+    kind: [this.data.keyDate?.kind ?? 'delivery'],
     day: [this.at.day, Validators.required],
     time: [this.at.time, Validators.required],
-    strength: [this.data.keyDate?.strength ?? ('hard' as KeyDateView['strength'])],
+    strength: [this.data.keyDate?.strength ?? 'hard'],
     pieceIds: new FormControl<string[]>([...(this.data.keyDate?.pieceIds ?? [])], { nonNullable: true }),
     weight: new FormControl<number | null>(this.data.keyDate?.weight ?? USUAL_WEIGHT, [
       Validators.required,

@@ -101,11 +101,11 @@ export class LinksEditor {
 
   protected readonly form = inject(NonNullableFormBuilder).group({
     fromStageId: ['', Validators.required],
-    kind: ['finish-start' as StageLink['kind']],
-    after: ['dwell' as StageLink['after']],
+    kind: new FormControl<StageLink['kind']>('finish-start', { nonNullable: true }),
+    after: new FormControl<StageLink['after']>('dwell', { nonNullable: true }),
     minGapMinutes: new FormControl<number | null>(0, Validators.required),
     maxGapMinutes: new FormControl<number | null>(null),
-    time: ['clock' as StageLink['time']],
+    time: new FormControl<StageLink['time']>('clock', { nonNullable: true }),
   });
 
   protected say(link: StageLink): string {

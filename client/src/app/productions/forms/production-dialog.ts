@@ -99,7 +99,7 @@ export class ProductionDialog {
       must((mark: string) => mark === '' || isMark(mark), 'A mark is two letters.'),
     ],
     hue: [this.data.production?.hue ?? this.freeHue()],
-    state: [this.data.production?.state ?? ('committed' as ProductionSummary['state'])],
+    state: [this.data.production?.state ?? 'committed'],
     note: [this.data.production?.note ?? '', keeps(Note)],
   });
   protected readonly state = signal(this.form.controls.state.value);

@@ -98,7 +98,7 @@ export class StageDialog {
   protected readonly materialChoices = computed(() => named(this.materials.value()));
   protected readonly milestoneChoices = computed(() =>
     this.dwellsOfMaterial().map((dwell) => ({
-      value: dwell.milestone as string,
+      value: dwell.milestone,
       label: MILESTONE_NAMES[dwell.milestone],
     })),
   );
