@@ -405,8 +405,8 @@ export class Timeline {
     this.focusKey.set({ rowKey: laid.rowKey, stageId: laid.tape.stageId });
     afterNextRender(
       () => {
-        const selector = `[data-tape="${CSS.escape(domKey(laid))}"]`;
-        this.scroller().nativeElement.querySelector<HTMLElement>(selector)?.focus({ preventScroll: true });
+        const tapes = this.scroller().nativeElement.querySelectorAll<HTMLElement>('button.tape');
+        [...tapes].find((tape) => tape.dataset['tape'] === domKey(laid))?.focus({ preventScroll: true });
       },
       { injector: this.injector },
     );
