@@ -76,6 +76,7 @@ export class PlanPage {
   private readonly views = inject(ViewContainerRef);
   private readonly timeline = viewChild(Timeline);
   private readonly inspector = viewChild(Inspector);
+  private isResumed = false;
   private levelDialog: MatDialogRef<LevelDialog> | null = null;
 
   /** From the address: what rows stand for, the stage looked at, the left edge, the zoom, the nights, a levelling under way. */
@@ -110,11 +111,15 @@ export class PlanPage {
     });
     effect(() => {
       const id = this.levelling();
-      if (id !== undefined && this.plan.view()) untracked(() => void this.resumeLevel(id));
+      if (!this.plan.view() || this.isResumed) return;
+      // Only as the page opens: later the address follows the levelling, not the other way round.
+      this.isResumed = true;
+      if (id !== undefined) untracked(() => void this.resumeLevel(id));
     });
     effect(() => {
       const run = this.level.run();
-      untracked(() => this.address.keep({ levelling: run?.id ?? null }));
+      // Before the plan is there the address knows more than the store.
+      if (this.isResumed) untracked(() => this.address.keep({ levelling: run?.id ?? null }));
     });
     inject(DestroyRef).onDestroy(() => this.levelDialog?.close());
   }
@@ -207,6 +212,6 @@ export class PlanPage {
     await this.level.resume(id);
     const state = this.level.run()?.state;
     if (state === 'waiting' || state === 'running' || this.level.proposal() !== null) this.openLevel();
-    else this.address.keep({ levelling: null });
+    else await this.level.leave();
   }
 }

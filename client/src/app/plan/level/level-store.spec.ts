@@ -99,18 +99,16 @@ describe('a levelling', () => {
   it('says what the server says where one is running already', async () => {
     const { level, http } = await open();
     void level.start('within-dates');
-    http
-      .expectOne('/api/plan/level')
-      .flush(
-        {
-          type: '/problems/level-running',
-          title: 'A levelling is already running',
-          status: 409,
-          detail: 'Wait for it.',
-          requestId: 'r',
-        },
-        { status: 409, statusText: 'Conflict' },
-      );
+    http.expectOne('/api/plan/level').flush(
+      {
+        type: '/problems/level-running',
+        title: 'A levelling is already running',
+        status: 409,
+        detail: 'Wait for it.',
+        requestId: 'r',
+      },
+      { status: 409, statusText: 'Conflict' },
+    );
     await settle();
     expect(level.trouble()).toEqual({ title: 'A levelling is already running', detail: 'Wait for it.' });
   });

@@ -10,7 +10,7 @@ import { TimelineHarness } from './testing/timeline-harness';
 import { Timeline } from './timeline';
 
 @Component({
-  changeDetection: ChangeDetectionStrategy.Eager,
+  changeDetection: ChangeDetectionStrategy.OnPush,
   imports: [HoldLedger, Timeline],
   template: `<fettle-timeline (chosen)="chosen = $event" (saysWhy)="refused = $event" /><fettle-hold-ledger />`,
 })

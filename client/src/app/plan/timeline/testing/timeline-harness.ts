@@ -1,4 +1,4 @@
-import { ComponentHarness, type TestElement, TestKey } from '@angular/cdk/testing';
+import { ComponentHarness, type TestElement, type TestKey } from '@angular/cdk/testing';
 
 /** Works the wall as a person at the keyboard would. */
 export class TimelineHarness extends ComponentHarness {
