@@ -48,7 +48,10 @@ describe('reasons in the trade’s words', () => {
     const booth = { bayIds: ['booth'], units: 1, hold: { kind: 'work' } } as const;
     const problem = studio({
       bays: [{ id: 'booth', capacity: 1, open: null }],
-      stages: [stage('coat', { places: [booth], pin: { start: at(0, 0), makerIds: null, bayIds: null } }), stage('varnish', { places: [booth] })],
+      stages: [
+        stage('coat', { places: [booth], pin: { start: at(0, 0), makerIds: null, bayIds: null } }),
+        stage('varnish', { places: [booth] }),
+      ],
     });
     const plan = run(problem);
     expect(reasonsOf(problem, plan, 'varnish')[0]).toBe('booth is taken by coat until Mon 01:00');
@@ -77,12 +80,23 @@ describe('a driving chain', () => {
   const problem = studio({
     makers: [maker('ana', { laminating: 1000 })],
     stages: [
-      stage('lay-up', { crew: hands('laminating'), continuity: 'session', dwell: { minutes: 600, advance: {}, attendedMinutes: 0, window: null } }),
-      stage('other', { productionId: 'second', crew: hands('laminating'), continuity: 'session', pin: { start: at(1, 8), makerIds: ['ana'], bayIds: null } }),
+      stage('lay-up', {
+        crew: hands('laminating'),
+        continuity: 'session',
+        dwell: { minutes: 600, advance: {}, attendedMinutes: 0, window: null },
+      }),
+      stage('other', {
+        productionId: 'second',
+        crew: hands('laminating'),
+        continuity: 'session',
+        pin: { start: at(1, 8), makerIds: ['ana'], bayIds: null },
+      }),
       stage('trim', { crew: hands('laminating'), continuity: 'session' }),
     ],
     links: [link('lay-up', 'trim')],
-    keyDates: [{ id: 'delivery', productionId: 'production', at: at(2, 12), strength: 'hard', weight: 1, stageIds: ['trim'] }],
+    keyDates: [
+      { id: 'delivery', productionId: 'production', at: at(2, 12), strength: 'hard', weight: 1, stageIds: ['trim'] },
+    ],
   });
 
   it('crosses into another production where its work stands in the way', () => {
@@ -100,13 +114,25 @@ describe('changes between plans', () => {
   it('are told one by one', () => {
     const before: Plan = {
       placements: [
-        { stageId: 'a', work: [{ start: at(0, 8), end: at(0, 9) }], crew: [{ makerId: 'ana', craftId: 'carving' }], bayIds: ['booth'], dwellEnd: at(0, 9) },
+        {
+          stageId: 'a',
+          work: [{ start: at(0, 8), end: at(0, 9) }],
+          crew: [{ makerId: 'ana', craftId: 'carving' }],
+          bayIds: ['booth'],
+          dwellEnd: at(0, 9),
+        },
         { stageId: 'gone', work: [{ start: at(0, 10), end: at(0, 11) }], crew: [], bayIds: [], dwellEnd: at(0, 11) },
       ],
     };
     const after: Plan = {
       placements: [
-        { stageId: 'a', work: [{ start: at(1, 8), end: at(1, 9) }], crew: [{ makerId: 'ben', craftId: 'carving' }], bayIds: ['yard'], dwellEnd: at(1, 9) },
+        {
+          stageId: 'a',
+          work: [{ start: at(1, 8), end: at(1, 9) }],
+          crew: [{ makerId: 'ben', craftId: 'carving' }],
+          bayIds: ['yard'],
+          dwellEnd: at(1, 9),
+        },
         { stageId: 'new', work: [{ start: at(2, 8), end: at(2, 9) }], crew: [], bayIds: [], dwellEnd: at(2, 9) },
       ],
     };
@@ -124,10 +150,20 @@ describe('changes between plans', () => {
 describe('broken requirements', () => {
   it('are told with what would mend them', () => {
     const told = sayUnmet(
-      { rule: 'window', stageIds: ['coat 1', 'coat 2'], keyDateId: null, makerIds: [], bayIds: [], craftIds: [], by: 150 },
+      {
+        rule: 'window',
+        stageIds: ['coat 1', 'coat 2'],
+        keyDateId: null,
+        makerIds: [],
+        bayIds: [],
+        craftIds: [],
+        by: 150,
+      },
       names,
       say,
     );
-    expect(told).toBe('coat 2 starts 2 h 30 min after the window of coat 1 has closed. Start coat 1 later, or free a maker for coat 2.');
+    expect(told).toBe(
+      'coat 2 starts 2 h 30 min after the window of coat 1 has closed. Start coat 1 later, or free a maker for coat 2.',
+    );
   });
 });

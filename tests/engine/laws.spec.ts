@@ -82,7 +82,9 @@ describe('levelling', () => {
       fc.property(studios(true), (problem) => {
         const start = run(problem, 1);
         const end = run(problem, 60);
-        expect(compareObjectives(end.objective, start.objective, { ...problem.weights, unevenness: 0, earliness: 0 })).toBeLessThanOrEqual(0);
+        expect(
+          compareObjectives(end.objective, start.objective, { ...problem.weights, unevenness: 0, earliness: 0 }),
+        ).toBeLessThanOrEqual(0);
       }),
       { ...settled, numRuns: 40 },
     );
@@ -164,7 +166,12 @@ describe('a move by hand', () => {
         const { plan } = run(problem, 1);
         const moved = plan.placements[which % plan.placements.length];
         const start = moved.work[0].start + days * 1440;
-        const move = { stageId: moved.stageId, start, makerIds: moved.crew.map((one) => one.makerId), bayIds: moved.bayIds };
+        const move = {
+          stageId: moved.stageId,
+          start,
+          makerIds: moved.crew.map((one) => one.makerId),
+          bayIds: moved.bayIds,
+        };
         const result = replaceAfterMove(problem, plan, move);
         expect(result.plan.placements.find((one) => one.stageId === moved.stageId)?.work[0].start).toBe(start);
         const others = result.unmet.filter(
@@ -184,7 +191,12 @@ describe('a move by hand', () => {
         const { plan } = run(problem, 1);
         const still = plan.placements[which % plan.placements.length];
         const makerIds = still.crew.map((one) => one.makerId);
-        const result = replaceAfterMove(problem, plan, { stageId: still.stageId, start: still.work[0].start, makerIds, bayIds: still.bayIds });
+        const result = replaceAfterMove(problem, plan, {
+          stageId: still.stageId,
+          start: still.work[0].start,
+          makerIds,
+          bayIds: still.bayIds,
+        });
         expect(result.moved).toEqual([]);
       }),
       { ...settled, numRuns: 60 },

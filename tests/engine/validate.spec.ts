@@ -5,7 +5,11 @@ import { at, link, maker, MON, stage, studio } from './support/small-studio';
 const sound = studio({
   makers: [maker('ana', { carving: 1000 })],
   bays: [{ id: 'booth', capacity: 1, open: null }],
-  stages: [stage('a', { crew: [{ craftId: 'carving', least: 1, most: 1 }], continuity: 'session' }), stage('b'), stage('c')],
+  stages: [
+    stage('a', { crew: [{ craftId: 'carving', least: 1, most: 1 }], continuity: 'session' }),
+    stage('b'),
+    stage('c'),
+  ],
   links: [link('a', 'b'), link('b', 'c')],
 });
 const withB = (changes: Parameters<typeof stage>[1]): Problem => ({
@@ -20,22 +24,60 @@ const cases: [Fault['kind'], Problem][] = [
   ['not-an-integer', withB({ effort: { kind: 'duration', minutes: 1.5 } })],
   ['negative-amount', withB({ effort: { kind: 'duration', minutes: -1 } })],
   ['reversed-span', { ...sound, horizon: { start: MON, end: MON - 1 } }],
-  ['spans-out-of-order', { ...sound, makers: [maker('ana', { carving: 1000 }, { shifts: [{ start: at(1, 8), end: at(1, 9) }, { start: at(0, 8), end: at(0, 9) }] })] }],
+  [
+    'spans-out-of-order',
+    {
+      ...sound,
+      makers: [
+        maker(
+          'ana',
+          { carving: 1000 },
+          {
+            shifts: [
+              { start: at(1, 8), end: at(1, 9) },
+              { start: at(0, 8), end: at(0, 9) },
+            ],
+          },
+        ),
+      ],
+    },
+  ],
   ['profile-out-of-order', { ...sound, advances: [{ id: 'cold', from: [5, 5], permille: [1, 2] }] }],
   ['crew-bounds', withB({ crew: [{ craftId: 'carving', least: 2, most: 1 }] })],
   ['craft-nobody-holds', withB({ crew: [{ craftId: 'gilding', least: 1, most: 1 }], continuity: 'session' })],
   ['too-few-hands', withB({ crew: [{ craftId: 'carving', least: 2, most: 2 }], continuity: 'session' })],
-  ['session-too-long', withB({ crew: [{ craftId: 'carving', least: 1, most: 1 }], continuity: 'session', effort: { kind: 'duration', minutes: 241 } })],
+  [
+    'session-too-long',
+    withB({
+      crew: [{ craftId: 'carving', least: 1, most: 1 }],
+      continuity: 'session',
+      effort: { kind: 'duration', minutes: 241 },
+    }),
+  ],
   ['crew-on-clock', withB({ crew: [{ craftId: 'carving', least: 1, most: 1 }] })],
   ['attended-by-nobody', withB({ dwell: { minutes: 60, advance: {}, attendedMinutes: 30, window: null } })],
   ['no-bay', withB({ places: [{ bayIds: [], units: 1, hold: { kind: 'work' } }] })],
   ['bay-too-small', withB({ places: [{ bayIds: ['booth'], units: 2, hold: { kind: 'work' } }] })],
-  ['hold-not-let-go', withB({ places: [{ bayIds: ['booth'], units: 1, hold: { kind: 'until-stage', stageId: 'a' } }] })],
-  ['window-before-dwell', withB({ dwell: { minutes: 60, advance: {}, attendedMinutes: 0, window: { kind: 'hard', minutes: 30 } } })],
+  [
+    'hold-not-let-go',
+    withB({ places: [{ bayIds: ['booth'], units: 1, hold: { kind: 'until-stage', stageId: 'a' } }] }),
+  ],
+  [
+    'window-before-dwell',
+    withB({ dwell: { minutes: 60, advance: {}, attendedMinutes: 0, window: { kind: 'hard', minutes: 30 } } }),
+  ],
   ['gaps-reversed', { ...sound, links: [link('a', 'b', { minGapMinutes: 20, maxGapMinutes: 10 })] }],
   ['link-cycle', { ...sound, links: [...sound.links, link('c', 'a')] }],
   ['link-cycle', { ...sound, links: [...sound.links, link('a', 'c', { kind: 'start-start', maxGapMinutes: 119 })] }],
-  ['shifts-break-limits', { ...sound, makers: [maker('ana', { carving: 1000 }, { limits: { dayMinutes: 400, weekMinutes: 2400, restBetweenMinutes: 660 } })] }],
+  [
+    'shifts-break-limits',
+    {
+      ...sound,
+      makers: [
+        maker('ana', { carving: 1000 }, { limits: { dayMinutes: 400, weekMinutes: 2400, restBetweenMinutes: 660 } }),
+      ],
+    },
+  ],
 ];
 
 describe('faults of a problem', () => {
@@ -54,7 +96,9 @@ describe('faults of a problem', () => {
   });
 
   it('allow a maximum gap that just fits', () => {
-    expect(validate({ ...sound, links: [...sound.links, link('a', 'c', { kind: 'start-start', maxGapMinutes: 120 })] })).toEqual([]);
+    expect(
+      validate({ ...sound, links: [...sound.links, link('a', 'c', { kind: 'start-start', maxGapMinutes: 120 })] }),
+    ).toEqual([]);
   });
 
   it('keep a search from starting only where the problem makes no sense', () => {
@@ -70,7 +114,11 @@ describe('a fingerprint', () => {
     const same = { ...sound, stages: [...sound.stages].reverse() };
     expect(fingerprint(same)).toBe(fingerprint(sound));
     expect(fingerprint(sound)).toMatch(/^[0-9a-f]{32}$/);
-    const others = [withB({ crewLossPermille: 1 }), { ...sound, freezeUntil: MON + 1 }, { ...sound, links: sound.links.slice(1) }];
+    const others = [
+      withB({ crewLossPermille: 1 }),
+      { ...sound, freezeUntil: MON + 1 },
+      { ...sound, links: sound.links.slice(1) },
+    ];
     expect(new Set([sound, ...others].map(fingerprint)).size).toBe(4);
   });
 });

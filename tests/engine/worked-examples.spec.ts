@@ -1,4 +1,14 @@
-import { check, craftLoad, level, levelWithinDates, type LevelResult, measure, type Plan, type Problem, type Stage } from '@common/planning';
+import {
+  check,
+  craftLoad,
+  level,
+  levelWithinDates,
+  type LevelResult,
+  measure,
+  type Plan,
+  type Problem,
+  type Stage,
+} from '@common/planning';
 import { link, maker, MON, stage, studio } from './support/small-studio';
 
 /**
@@ -7,19 +17,20 @@ import { link, maker, MON, stage, studio } from './support/small-studio';
  * squares of the early profile, 743, is published; 701, the least of all 3,185 schedules within float, was found by exhaustion; the
  * lengths under a cap were computed by hand-checked serial generation with priority by latest start, then name.
  */
-const ACTIVITIES: Readonly<Record<string, { readonly days: number; readonly hands: number; readonly after: string }>> = {
-  A: { days: 3, hands: 3, after: '' },
-  B: { days: 5, hands: 2, after: '' },
-  C: { days: 6, hands: 3, after: 'A' },
-  D: { days: 2, hands: 4, after: 'A' },
-  E: { days: 3, hands: 2, after: 'D' },
-  F: { days: 3, hands: 1, after: 'D' },
-  G: { days: 4, hands: 3, after: 'B' },
-  H: { days: 5, hands: 2, after: 'G' },
-  I: { days: 4, hands: 3, after: 'C' },
-  J: { days: 2, hands: 4, after: 'IEF' },
-  K: { days: 3, hands: 5, after: 'J' },
-};
+const ACTIVITIES: Readonly<Record<string, { readonly days: number; readonly hands: number; readonly after: string }>> =
+  {
+    A: { days: 3, hands: 3, after: '' },
+    B: { days: 5, hands: 2, after: '' },
+    C: { days: 6, hands: 3, after: 'A' },
+    D: { days: 2, hands: 4, after: 'A' },
+    E: { days: 3, hands: 2, after: 'D' },
+    F: { days: 3, hands: 1, after: 'D' },
+    G: { days: 4, hands: 3, after: 'B' },
+    H: { days: 5, hands: 2, after: 'G' },
+    I: { days: 4, hands: 3, after: 'C' },
+    J: { days: 2, hands: 4, after: 'IEF' },
+    K: { days: 3, hands: 5, after: 'J' },
+  };
 /** One "day" of the example is a quarter of an hour here, so that a unit of load is a quarter hour. */
 const DAY = 15;
 
@@ -37,9 +48,15 @@ function example(hands: number, horizonDays: number): Problem {
     stages,
     links: Object.entries(ACTIVITIES).flatMap(([to, { after }]) => [...after].map((from) => link(from, to))),
     makers: Array.from({ length: hands }, (_, k) => maker(`maker-${k}`, { craft: 1000 }, { shifts: [horizon] })),
-    days: Array.from({ length: horizonDays }, (_, d) => ({ day: `day-${d}`, start: MON + d * DAY, end: MON + (d + 1) * DAY })),
+    days: Array.from({ length: horizonDays }, (_, d) => ({
+      day: `day-${d}`,
+      start: MON + d * DAY,
+      end: MON + (d + 1) * DAY,
+    })),
     workingTime: [horizon],
-    keyDates: [{ id: 'end', productionId: 'production', at: MON + 18 * DAY, strength: 'hard', weight: 1, stageIds: ['K', 'H'] }],
+    keyDates: [
+      { id: 'end', productionId: 'production', at: MON + 18 * DAY, strength: 'hard', weight: 1, stageIds: ['K', 'H'] },
+    ],
   });
 }
 
@@ -60,7 +77,13 @@ function earlyPlan(problem: Problem): Plan {
       const end = ends.get(id) ?? MON;
       const crew = problem.makers.filter((one) => (busy.get(one.id) ?? MON) <= start).slice(0, ACTIVITIES[id].hands);
       for (const one of crew) busy.set(one.id, end);
-      return { stageId: id, work: [{ start, end }], crew: crew.map((one) => ({ makerId: one.id, craftId: 'craft' })), bayIds: [], dwellEnd: end };
+      return {
+        stageId: id,
+        work: [{ start, end }],
+        crew: crew.map((one) => ({ makerId: one.id, craftId: 'craft' })),
+        bayIds: [],
+        dwellEnd: end,
+      };
     }),
   };
 }
@@ -77,7 +100,11 @@ describe('the levelling example', () => {
   });
 
   it('is evened to 713 or less, and never below what is possible', () => {
-    const { objective, unmet } = levelWithinDates(problem, early, { seed: 1, maxSchedules: 200, shouldStop: () => false });
+    const { objective, unmet } = levelWithinDates(problem, early, {
+      seed: 1,
+      maxSchedules: 200,
+      shouldStop: () => false,
+    });
     expect(unmet).toEqual([]);
     expect(objective.unevenness).toBeLessThanOrEqual(713);
     expect(objective.unevenness).toBeGreaterThanOrEqual(701);
@@ -99,21 +126,21 @@ describe('the levelling example', () => {
   });
 
   it('is never quicker with less', () => {
-    const spans = [9, 8, 7, 6, 5].map((capacity) => Math.max(...levelCapped(capacity).plan.placements.map((one) => one.dwellEnd)));
+    const spans = [9, 8, 7, 6, 5].map((capacity) =>
+      Math.max(...levelCapped(capacity).plan.placements.map((one) => one.dwellEnd)),
+    );
     expect(spans).toEqual([...spans].sort((a, b) => a - b));
   });
 });
 
 function levelCapped(capacity: number): LevelResult {
   const base = example(0, 60);
-  const stages = base.stages.map(
-    (one): Stage => ({
-      ...one,
-      crew: [],
-      continuity: 'clock',
-      places: [{ bayIds: ['bay'], units: ACTIVITIES[one.id].hands, hold: { kind: 'work' } }],
-    }),
-  );
+  const stages = base.stages.map((one): Stage => ({
+    ...one,
+    crew: [],
+    continuity: 'clock',
+    places: [{ bayIds: ['bay'], units: ACTIVITIES[one.id].hands, hold: { kind: 'work' } }],
+  }));
   const problem = { ...base, stages, keyDates: [], bays: [{ id: 'bay', capacity, open: null }] };
   return level(problem, { seed: 1, maxSchedules: 500, shouldStop: () => false });
 }

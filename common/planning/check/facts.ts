@@ -43,7 +43,9 @@ export function gatherFacts(problem: Problem, plan: Plan): Facts {
     makers,
     bays,
     placed,
-    presence: remember((id) => mergeSpans([...(makers.get(id)?.shifts ?? none), ...(makers.get(id)?.overtime ?? none)])),
+    presence: remember((id) =>
+      mergeSpans([...(makers.get(id)?.shifts ?? none), ...(makers.get(id)?.overtime ?? none)]),
+    ),
     shifts: remember((id) => mergeSpans(makers.get(id)?.shifts ?? none)),
     open: remember((id) => {
       const open = bays.get(id)?.open;
@@ -100,7 +102,8 @@ export function mergeSpans(spans: readonly Span[]): Span[] {
   const merged: Span[] = [];
   for (const span of sorted) {
     const last = merged[merged.length - 1];
-    if (last && span.start <= last.end) merged[merged.length - 1] = { start: last.start, end: Math.max(last.end, span.end) };
+    if (last && span.start <= last.end)
+      merged[merged.length - 1] = { start: last.start, end: Math.max(last.end, span.end) };
     else merged.push(span);
   }
   return merged;
@@ -112,7 +115,7 @@ export function commonSpans(a: readonly Span[], b: readonly Span[]): Span[] {
   // Whatever ends before the other list begins has nothing in common with it.
   const first = (list: readonly Span[], other: readonly Span[]): number =>
     other.length === 0 ? list.length : firstEndingAfter(list, other[0].start);
-  for (let i = first(a, b), j = first(b, a); i < a.length && j < b.length; ) {
+  for (let i = first(a, b), j = first(b, a); i < a.length && j < b.length;) {
     const start = Math.max(a[i].start, b[j].start);
     const end = Math.min(a[i].end, b[j].end);
     if (start < end) common.push({ start, end });

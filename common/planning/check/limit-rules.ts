@@ -19,7 +19,8 @@ function workOf(facts: Facts, makerId: string): Span[] {
   const spans: Span[] = [];
   for (const [stageId, placement] of facts.placed) {
     const stage = facts.stages.get(stageId);
-    if (stage && placement.crew.some((member) => member.makerId === makerId)) spans.push(...plannedWork(stage, placement));
+    if (stage && placement.crew.some((member) => member.makerId === makerId))
+      spans.push(...plannedWork(stage, placement));
   }
   return mergeSpans(spans);
 }

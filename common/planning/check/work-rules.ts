@@ -30,7 +30,9 @@ export function checkEffort(facts: Facts, stage: Stage, placement: Placement): U
   if (stage.progress.kind === 'finished') return [];
   const done = totalMinutes(plannedWork(stage, placement));
   const by = Math.abs(done - minutesWanted(facts, stage, placement));
-  const tidy = placement.work.every((span, i) => span.end >= span.start && (i === 0 || span.start >= placement.work[i - 1].end));
+  const tidy = placement.work.every(
+    (span, i) => span.end >= span.start && (i === 0 || span.start >= placement.work[i - 1].end),
+  );
   return by === 0 && tidy ? [] : [unmet('effort', { stageIds: [stage.id], by })];
 }
 
@@ -41,7 +43,8 @@ function minutesWanted(facts: Facts, stage: Stage, placement: Placement): number
       : stage.effort.minutes + missedWindowMinutes(facts, stage, placement);
   if (stage.effort.kind === 'duration' || stage.crew.length === 0) return minutes;
   const paces = placement.crew.map(
-    (member) => facts.makers.get(member.makerId)?.crafts.find((craft) => craft.craftId === member.craftId)?.pacePermille ?? 0,
+    (member) =>
+      facts.makers.get(member.makerId)?.crafts.find((craft) => craft.craftId === member.craftId)?.pacePermille ?? 0,
   );
   const output = paces.reduce((sum, pace) => sum + pace, 0) - stage.crewLossPermille * (paces.length - 1);
   return output > 0 ? Math.ceil((minutes * 1000) / output) : Number.MAX_SAFE_INTEGER;
@@ -79,9 +82,13 @@ export function checkCrewSize(_facts: Facts, stage: Stage, placement: Placement)
     if (by > 0) found.push(unmet('crew-size', { stageIds: [stage.id], craftIds: [need.craftId], by }));
   }
   const idle = placement.crew.filter((member) => !stage.crew.some((need) => need.craftId === member.craftId));
-  const twice = placement.crew.filter((member, i) => placement.crew.findIndex((other) => other.makerId === member.makerId) !== i);
+  const twice = placement.crew.filter(
+    (member, i) => placement.crew.findIndex((other) => other.makerId === member.makerId) !== i,
+  );
   for (const member of [...idle, ...twice]) {
-    found.push(unmet('crew-size', { stageIds: [stage.id], makerIds: [member.makerId], craftIds: [member.craftId], by: 1 }));
+    found.push(
+      unmet('crew-size', { stageIds: [stage.id], makerIds: [member.makerId], craftIds: [member.craftId], by: 1 }),
+    );
   }
   return found;
 }
@@ -91,7 +98,9 @@ export function checkCrewCraft(facts: Facts, stage: Stage, placement: Placement)
   if (hasBegun(stage)) return [];
   return placement.crew
     .filter((member) => !facts.makers.get(member.makerId)?.crafts.some((craft) => craft.craftId === member.craftId))
-    .map((member) => unmet('crew-craft', { stageIds: [stage.id], makerIds: [member.makerId], craftIds: [member.craftId] }));
+    .map((member) =>
+      unmet('crew-craft', { stageIds: [stage.id], makerIds: [member.makerId], craftIds: [member.craftId] }),
+    );
 }
 
 /** All the crew are on shift, ordinary or overtime, for every minute of the work. */
@@ -130,7 +139,9 @@ export function checkContinuity(facts: Facts, stage: Stage, placement: Placement
 export function checkDwell(facts: Facts, stage: Stage, placement: Placement): Unmet[] {
   const end = workEnd(placement);
   if (!stage.dwell || stage.dwell.minutes === 0) {
-    return placement.dwellEnd === end ? [] : [unmet('dwell', { stageIds: [stage.id], by: Math.abs(placement.dwellEnd - end) })];
+    return placement.dwellEnd === end
+      ? []
+      : [unmet('dwell', { stageIds: [stage.id], by: Math.abs(placement.dwellEnd - end) })];
   }
   const profile = profileOf(facts.problem, stage, placement);
   const wanted = stage.dwell.minutes * 1000;
@@ -147,5 +158,7 @@ export function checkAttended(facts: Facts, stage: Stage, placement: Placement):
   const watch = { start: workEnd(placement), end: workEnd(placement) + minutes };
   const away = placement.crew.map((member) => minutesOutside(watch, facts.presence(member.makerId)));
   const by = Math.min(minutes, ...away);
-  return by === 0 ? [] : [unmet('attended', { stageIds: [stage.id], makerIds: placement.crew.map((member) => member.makerId), by })];
+  return by === 0
+    ? []
+    : [unmet('attended', { stageIds: [stage.id], makerIds: placement.crew.map((member) => member.makerId), by })];
 }

@@ -42,14 +42,23 @@ export class Mender {
   }
 
   /** Puts a stage at a start (or as early as its old one allows, where none is given), with chosen crews and bays or its own. */
-  put(stage: number, start: number | null, crews: readonly Crew[] | null, housings: readonly Int32Array[] | null): void {
+  put(
+    stage: number,
+    start: number | null,
+    crews: readonly Crew[] | null,
+    housings: readonly Int32Array[] | null,
+  ): void {
     const { layout } = this;
     this.held = stage;
     const wasPlaced = layout.isPlaced[stage] === 1;
     const oldCrew = wasPlaced ? layout.crew[stage] : null;
     const oldHousing = wasPlaced ? layout.housing[stage] : null;
     const at = start ?? (wasPlaced ? this.stood[stage] : 0);
-    const stays = wasPlaced && at === this.stood[stage] && isAmong(crews, oldCrew, sameMakers) && isAmong(housings, oldHousing, sameBays);
+    const stays =
+      wasPlaced &&
+      at === this.stood[stage] &&
+      isAmong(crews, oldCrew, sameMakers) &&
+      isAmong(housings, oldHousing, sameBays);
     if (stays) return;
     if (wasPlaced) layout.unplace(stage);
     this.bounds.gather(stage, 0);
@@ -85,7 +94,12 @@ export class Mender {
   private firstOf(queue: ReadonlySet<number>): number {
     let first = -1;
     for (const stage of queue) {
-      if (first < 0 || this.stood[stage] < this.stood[first] || (this.stood[stage] === this.stood[first] && stage < first)) first = stage;
+      if (
+        first < 0 ||
+        this.stood[stage] < this.stood[first] ||
+        (this.stood[stage] === this.stood[first] && stage < first)
+      )
+        first = stage;
     }
     return first;
   }
@@ -109,7 +123,8 @@ export class Mender {
   private isFreeFor({ fit, crew }: Lifted): boolean {
     for (const maker of crew?.makers ?? []) {
       const bookings = this.layout.bookings[maker];
-      for (let s = 0; s < fit.spanCount; s += 1) if (bookings.nextStart(fit.spans[2 * s]) < fit.spans[2 * s + 1]) return false;
+      for (let s = 0; s < fit.spanCount; s += 1)
+        if (bookings.nextStart(fit.spans[2 * s]) < fit.spans[2 * s + 1]) return false;
     }
     return true;
   }
@@ -211,10 +226,17 @@ export class Mender {
   private fitWith(stage: number, crew: Crew | null, housing: Int32Array | null): boolean {
     const { bounds } = this;
     const ask: Ask = {
-      stage, crew, housing, minutes: 0, overtime: false,
-      lowStart: bounds.lowStart, lowEnd: bounds.lowEnd, lowFinish: bounds.lowFinish, lastStart: NEVER,
+      stage,
+      crew,
+      housing,
+      minutes: 0,
+      overtime: false,
+      lowStart: bounds.lowStart,
+      lowEnd: bounds.lowEnd,
+      lowFinish: bounds.lowFinish,
+      lastStart: NEVER,
     };
-    for (let owed = -1; ; ) {
+    for (let owed = -1; ;) {
       const minutes = this.minutesOwed(stage, crew, ask.lowStart);
       if (minutes === owed) return true;
       owed = minutes;
@@ -249,7 +271,8 @@ export class Mender {
     bays.frees[stage].forEach(add);
     const until = this.reach(stage);
     for (let other = 0; other < this.compiled.stageCount; other += 1) {
-      if (layout.start[other] < until && this.reach(other) > layout.start[stage] && this.shares(stage, other)) add(other);
+      if (layout.start[other] < until && this.reach(other) > layout.start[stage] && this.shares(stage, other))
+        add(other);
     }
     // What lets a hold of this stage's bay go may have to hurry: its holder's neighbours are looked at with it.
     for (const holder of bays.frees[stage]) {
@@ -286,7 +309,9 @@ function minutesOf(fit: Fit): number {
 
 /** Whether what a stage has is among what it may have; anything is where nothing is said. */
 function isAmong<T>(wanted: readonly T[] | null, has: T | null, isSame: (a: T, b: T) => boolean): boolean {
-  return wanted === null || wanted.some((one) => has !== null && isSame(one, has)) || (has === null && wanted.length === 0);
+  return (
+    wanted === null || wanted.some((one) => has !== null && isSame(one, has)) || (has === null && wanted.length === 0)
+  );
 }
 
 function sameMakers(a: Crew, b: Crew): boolean {

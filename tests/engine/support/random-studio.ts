@@ -22,7 +22,9 @@ export function randomStudio(size: StudioSize): Problem {
   const random = seededRandom(size.seed);
   const horizon = { start: MONDAY, end: MONDAY + size.weeks * 7 * DAY };
   const days = inventDays(size.weeks);
-  const workingTime = days.filter((_, d) => d % 7 < 5).map((day) => ({ start: day.start + 480, end: day.start + 1020 }));
+  const workingTime = days
+    .filter((_, d) => d % 7 < 5)
+    .map((day) => ({ start: day.start + 480, end: day.start + 1020 }));
   const makers = Array.from({ length: size.makers }, (_, m) => inventMaker(m, size.weeks, random));
   const bays: Bay[] = [
     { id: 'booth-a', capacity: 1, open: days.map((day) => ({ start: day.start + 360, end: day.start + 1320 })) },
@@ -44,7 +46,14 @@ export function randomStudio(size: StudioSize): Problem {
     }
     const at = MONDAY + random.between(2, size.weeks * 5) * DAY + 720;
     const strength = random.chance(0.5) ? 'hard' : 'wished';
-    keyDates.push({ id: `date-p${p}`, productionId: `p${p}`, at, strength, weight: random.between(1, 5), stageIds: ends });
+    keyDates.push({
+      id: `date-p${p}`,
+      productionId: `p${p}`,
+      at,
+      strength,
+      weight: random.between(1, 5),
+      stageIds: ends,
+    });
   }
   return {
     horizon,
@@ -54,7 +63,11 @@ export function randomStudio(size: StudioSize): Problem {
     links,
     keyDates,
     advances: [
-      { id: 'cold-nights', from: Array.from({ length: size.weeks * 14 }, (_, k) => MONDAY + k * 720), permille: Array.from({ length: size.weeks * 14 }, (_, k) => (k % 2 === 0 ? 600 : 1100)) },
+      {
+        id: 'cold-nights',
+        from: Array.from({ length: size.weeks * 14 }, (_, k) => MONDAY + k * 720),
+        permille: Array.from({ length: size.weeks * 14 }, (_, k) => (k % 2 === 0 ? 600 : 1100)),
+      },
       { id: 'oven', from: [MONDAY], permille: [2500] },
     ],
     days,
@@ -86,7 +99,10 @@ function inventMaker(m: number, weeks: number, random: Random): Maker {
   for (let d = 0; d < weeks * 7; d += 1) {
     if (d % 7 >= 5 || random.chance(0.03)) continue;
     const start = MONDAY + d * DAY;
-    shifts.push({ start: start + from, end: start + from + 240 }, { start: start + from + 270, end: start + from + 510 });
+    shifts.push(
+      { start: start + from, end: start + from + 240 },
+      { start: start + from + 270, end: start + from + 510 },
+    );
     if (m % 3 === 0) overtime.push({ start: start + from + 510, end: start + from + 630 });
   }
   return {
@@ -126,19 +142,41 @@ function inventPiece(productionId: string, pieceId: string, random: Random, tric
     ...changes,
   });
   const cure = (minutes: number, window: Dwell['window'], changes: Partial<Dwell> = {}): Dwell => ({
-    minutes, window, advance: {}, attendedMinutes: 0, ...changes,
+    minutes,
+    window,
+    advance: {},
+    attendedMinutes: 0,
+    ...changes,
   });
-  const booth = (hold: 'work' | 'dwell') => ({ bayIds: ['booth-a', 'booth-b'], units: 1, hold: { kind: hold } as const });
+  const booth = (hold: 'work' | 'dwell') => ({
+    bayIds: ['booth-a', 'booth-b'],
+    units: 1,
+    hold: { kind: hold } as const,
+  });
   const mould = `${pieceId}-mould`;
   const stages: Stage[] = [
     make('carve', 'carving', random.between(2, 30) * 60, { continuity: random.pick(['shifts', 'free']) }),
     make('approve', null, random.between(1, 3) * DAY, { continuity: 'clock' }),
-    make('frame', 'metalwork', random.between(1, 10) * 60, { places: [{ bayIds: ['welding-bay'], units: 1, hold: { kind: 'work' } }] }),
-    make('mould', 'laminating', random.between(2, 8) * 60, { dwell: cure(random.between(6, 30) * 60, null), places: [{ bayIds: ['long-table'], units: 1, hold: { kind: 'dwell' } }] }),
+    make('frame', 'metalwork', random.between(1, 10) * 60, {
+      places: [{ bayIds: ['welding-bay'], units: 1, hold: { kind: 'work' } }],
+    }),
+    make('mould', 'laminating', random.between(2, 8) * 60, {
+      dwell: cure(random.between(6, 30) * 60, null),
+      places: [{ bayIds: ['long-table'], units: 1, hold: { kind: 'dwell' } }],
+    }),
   ];
   const links: Link[] = [];
   const follow = (a: number, b: number, changes: Partial<Link> = {}): void => {
-    links.push({ fromStageId: stages[a].id, toStageId: stages[b].id, kind: 'finish-start', after: 'dwell', minGapMinutes: 0, maxGapMinutes: null, time: 'clock', ...changes });
+    links.push({
+      fromStageId: stages[a].id,
+      toStageId: stages[b].id,
+      kind: 'finish-start',
+      after: 'dwell',
+      minGapMinutes: 0,
+      maxGapMinutes: null,
+      time: 'clock',
+      ...changes,
+    });
   };
   follow(0, 1);
   follow(1, 2, { kind: 'start-start', minGapMinutes: 60 });
@@ -149,17 +187,35 @@ function inventPiece(productionId: string, pieceId: string, random: Random, tric
     stages.push(
       make(`lay-up-${cast}`, 'laminating', random.between(2, 4) * 30, {
         continuity: 'session',
-        dwell: cure(random.between(8, 20) * 60, null, { attendedMinutes: random.pick([0, 30]), advance: { [mould]: 'cold-nights' } }),
+        dwell: cure(random.between(8, 20) * 60, null, {
+          attendedMinutes: random.pick([0, 30]),
+          advance: { [mould]: 'cold-nights' },
+        }),
         places: [{ bayIds: [mould], units: 1, hold: { kind: 'until-stage', stageId: `${pieceId}-demould-${cast}` } }],
       }),
       make(`demould-${cast}`, 'laminating', 45, { continuity: 'session' }),
       make(`fill-${cast}`, 'filling', random.between(1, 8) * 60, { continuity: 'free' }),
       make(`coat-1-${cast}`, 'painting', random.between(1, tricky ? 6 : 3) * 30, {
         continuity: 'session',
-        dwell: cure(random.between(2, 6) * 60, random.chance(0.7) ? { kind: tricky && random.chance(0.5) ? 'hard' : 'soft', minutes: random.between(20, 60) * 60, extraMinutes: 60, costMinor: 1500 } : null, { advance: { 'booth-a': 'oven', 'booth-b': 'cold-nights' } }),
+        dwell: cure(
+          random.between(2, 6) * 60,
+          random.chance(0.7)
+            ? {
+                kind: tricky && random.chance(0.5) ? 'hard' : 'soft',
+                minutes: random.between(20, 60) * 60,
+                extraMinutes: 60,
+                costMinor: 1500,
+              }
+            : null,
+          { advance: { 'booth-a': 'oven', 'booth-b': 'cold-nights' } },
+        ),
         places: [booth('dwell')],
       }),
-      make(`coat-2-${cast}`, 'painting', random.between(1, tricky ? 6 : 3) * 30, { continuity: 'session', dwell: cure(240, null), places: [booth('work')] }),
+      make(`coat-2-${cast}`, 'painting', random.between(1, tricky ? 6 : 3) * 30, {
+        continuity: 'session',
+        dwell: cure(240, null),
+        places: [booth('work')],
+      }),
     );
     follow(3, at);
     follow(at, at + 1);

@@ -33,7 +33,16 @@ export function stage(id: string, changes: Partial<Stage> = {}): Stage {
 
 /** A finish-start link without a gap, but for the changes. */
 export function link(fromStageId: string, toStageId: string, changes: Partial<Link> = {}): Link {
-  return { fromStageId, toStageId, kind: 'finish-start', after: 'dwell', minGapMinutes: 0, maxGapMinutes: null, time: 'clock', ...changes };
+  return {
+    fromStageId,
+    toStageId,
+    kind: 'finish-start',
+    after: 'dwell',
+    minGapMinutes: 0,
+    maxGapMinutes: null,
+    time: 'clock',
+    ...changes,
+  };
 }
 
 /** A maker who works Monday to Friday, 8 to 12 and 13 to 17, for two weeks. */

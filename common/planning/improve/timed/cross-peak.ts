@@ -40,7 +40,13 @@ export function crossPeak(
 const TRIES = 3;
 
 /** Where the most work lies of a few stretches of a length, drawn at random. */
-function fullestStretch(problem: TimedProblem, starts: Int32Array, span: number, length: number, chance: Chance): number {
+function fullestStretch(
+  problem: TimedProblem,
+  starts: Int32Array,
+  span: number,
+  length: number,
+  chance: Chance,
+): number {
   let best = 0;
   let bestWork = -1;
   for (let k = 0; k < TRIES; k += 1) {

@@ -10,5 +10,6 @@ export function drawFirstKeys(problem: TimedProblem, chance: Chance, member: num
   let most = 1;
   for (let stage = 0; stage < count; stage += 1) most = Math.max(most, latestStart[stage]);
   const spread = member === 0 ? 0 : Math.floor(most * (0.3 + 0.5 * chance.share()));
-  for (let stage = 0; stage < count; stage += 1) keys[stage] = latestStart[stage] + (spread > 0 ? chance.below(spread + 1) : 0);
+  for (let stage = 0; stage < count; stage += 1)
+    keys[stage] = latestStart[stage] + (spread > 0 ? chance.below(spread + 1) : 0);
 }

@@ -28,5 +28,12 @@ export function levelTimed(compiled: Compiled, options: LevelOptions): LevelResu
   search.run();
   const plan = planOfStarts(compiled, search.best);
   const unmet = check(problem, plan);
-  return { plan, objective: measure(problem, plan, unmet), bound, unmet, schedules: budget.schedules, stop: budget.stop };
+  return {
+    plan,
+    objective: measure(problem, plan, unmet),
+    bound,
+    unmet,
+    schedules: budget.schedules,
+    stop: budget.stop,
+  };
 }

@@ -68,7 +68,7 @@ export class TimedSearch {
       let from = this.forward;
       let to = this.backward;
       let idle = 0;
-      for (let last = this.populationBest(from); !this.isOver() && idle < patience; ) {
+      for (let last = this.populationBest(from); !this.isOver() && idle < patience;) {
         this.generation(from, to, Math.min(1, LEAST_SHAKEN + (idle * SHAKEN_MORE) / count ** 2));
         [from, to] = [to, from];
         const now = this.populationBest(from);
@@ -124,7 +124,8 @@ export class TimedSearch {
   /** Every member of one population leaves a child in the other. */
   private generation(from: Population, to: Population, shaken: number): void {
     const { size, read, chance, keys, child } = this;
-    for (let member = 0; member < size; member += 1) this.readFromFarEnd(from.starts[member], from.makespan[member], read[member]);
+    for (let member = 0; member < size; member += 1)
+      this.readFromFarEnd(from.starts[member], from.makespan[member], read[member]);
     const elite = this.indexOfBest(from);
     for (let member = 0; member < size && !this.budget.isSpent(); member += 1) {
       to.fitness[member] = Infinity;
@@ -134,7 +135,16 @@ export class TimedSearch {
         else {
           const mate = this.tournament(from, member);
           const [mother, father] = chance.share() < 0.5 ? [member, mate] : [mate, member];
-          crossPeak(this.problem, read[mother], from.makespan[mother], read[father], from.makespan[father], chance, shaken, keys);
+          crossPeak(
+            this.problem,
+            read[mother],
+            from.makespan[mother],
+            read[father],
+            from.makespan[father],
+            chance,
+            shaken,
+            keys,
+          );
         }
         const makespan = this.layOut(to, keys, child);
         const fitness = makespan + this.lateness(child, makespan);
@@ -171,7 +181,8 @@ export class TimedSearch {
 
   private indexOfBest(population: Population): number {
     let best = 0;
-    for (let member = 1; member < this.size; member += 1) if (population.fitness[member] < population.fitness[best]) best = member;
+    for (let member = 1; member < this.size; member += 1)
+      if (population.fitness[member] < population.fitness[best]) best = member;
     return best;
   }
 

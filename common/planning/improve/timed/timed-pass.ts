@@ -62,7 +62,7 @@ export class TimedPass {
     const spare = demands.spare[0];
     let start = from;
     let known = from;
-    for (let t = start + length - 1; t >= known; ) {
+    for (let t = start + length - 1; t >= known;) {
       if (((left[t] - demand) & spare) === spare) t -= 1;
       else {
         // Minutes after the clash have been looked at: only those beyond the old end are new.
@@ -84,7 +84,7 @@ export class TimedPass {
     if (length === 0) return from;
     let start = from;
     let known = from;
-    for (let t = start + length - 1; t >= known; ) {
+    for (let t = start + length - 1; t >= known;) {
       let fits = true;
       for (let w = 0; w < words; w += 1) {
         if (((left[t * words + w] - byStage[row + w]) & spare[w]) !== spare[w]) {
@@ -124,7 +124,8 @@ export class TimedPass {
     for (let k = 0; k < count; k += 1) {
       const stage = topological[k];
       let key = given[stage];
-      for (let a = inOf[stage], end = inOf[stage + 1]; a < end; a += 1) if (keys[inFrom[a]] > key) key = keys[inFrom[a]];
+      for (let a = inOf[stage], end = inOf[stage + 1]; a < end; a += 1)
+        if (keys[inFrom[a]] > key) key = keys[inFrom[a]];
       keys[stage] = key;
       if (key < least) least = key;
       if (key > most) most = key;

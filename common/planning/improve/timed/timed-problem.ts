@@ -52,7 +52,8 @@ export interface PackedDemands {
 /** The compiled problem as a timed one; null where it asks for more than that. */
 export function asTimed(compiled: Compiled): TimedProblem | null {
   const { work, links, dates, bays, stageCount } = compiled;
-  if (stageCount === 0 || dates.count > 0 || dates.productionCount !== 1 || compiled.horizonMinutes > LONGEST_HORIZON) return null;
+  if (stageCount === 0 || dates.count > 0 || dates.productionCount !== 1 || compiled.horizonMinutes > LONGEST_HORIZON)
+    return null;
   for (let stage = 0; stage < stageCount; stage += 1) {
     const isPlain =
       work.continuity[stage] === CLOCK &&
@@ -65,10 +66,12 @@ export function asTimed(compiled: Compiled): TimedProblem | null {
     if (!isPlain) return null;
     for (let place = work.placeOf[stage]; place < work.placeOf[stage + 1]; place += 1) {
       const bay = work.housings[stage][0][place - work.placeOf[stage]];
-      if (work.placeHold[place] !== HOLD_WORK || bays.open[bay] !== null || work.placeUnits[place] > bays.capacity[bay]) return null;
+      if (work.placeHold[place] !== HOLD_WORK || bays.open[bay] !== null || work.placeUnits[place] > bays.capacity[bay])
+        return null;
     }
   }
-  for (let link = 0; link < links.count; link += 1) if (links.maxGap[link] < NEVER || links.isWorking[link] === 1) return null;
+  for (let link = 0; link < links.count; link += 1)
+    if (links.maxGap[link] < NEVER || links.isWorking[link] === 1) return null;
   const durations = work.minutes.slice();
   const rows = lagRows(compiled, durations);
   const ordered = sortTopologically(stageCount, rows);
