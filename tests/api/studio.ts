@@ -15,8 +15,7 @@ export const PASSWORD = 'a plain test password';
 /** An answer as a test reads it. */
 export interface Answer {
   readonly status: number;
-  // The contract's schemas check answers on the server; a test names what it looks at.
-  // eslint-disable-next-line @typescript-eslint/no-explicit-any
+  // eslint-disable-next-line @typescript-eslint/no-explicit-any -- the server checks answers by schema; a test names what it looks at
   readonly body: any;
   readonly headers: Headers;
 }
