@@ -5,7 +5,15 @@ import { findLinkCycles } from '../problem/link-cycles';
 import { type Facts, gatherFacts, unmet } from './facts';
 import { checkLimits } from './limit-rules';
 import { checkKeyDates, checkLinks, checkWindows } from './order-rules';
-import { checkEarliest, checkFixed, checkFreeze, checkHorizon, checkLatest, checkPin, checkProgress } from './promise-rules';
+import {
+  checkEarliest,
+  checkFixed,
+  checkFreeze,
+  checkHorizon,
+  checkLatest,
+  checkPin,
+  checkProgress,
+} from './promise-rules';
 import { checkBayCapacity, checkBayChoice, checkBayOpen, checkMakers } from './shared-rules';
 import {
   checkAttended,
@@ -54,6 +62,7 @@ export function check(problem: Problem, plan: Plan): Unmet[] {
   }
   found.push(...checkLinks(facts), ...checkWindows(facts), ...checkMakers(facts), ...checkBayCapacity(facts));
   found.push(...checkLimits(facts), ...checkFreeze(facts, problem.horizon.start), ...checkKeyDates(facts));
-  for (const cycle of findLinkCycles(problem)) found.push(unmet('link-cycle', { stageIds: cycle.stageIds, by: cycle.byMinutes }));
+  for (const cycle of findLinkCycles(problem))
+    found.push(unmet('link-cycle', { stageIds: cycle.stageIds, by: cycle.byMinutes }));
   return found;
 }

@@ -68,7 +68,8 @@ export function checkFreeze(facts: Facts, frozenFrom: Minute): Unmet[] {
     const sameWork =
       issued.work.length === placement.work.length &&
       issued.work.every((span, i) => span.start === placement.work[i].start && span.end === placement.work[i].end);
-    const same = sameWork && sameMembers(crewIds(issued), crewIds(placement)) && sameList(issued.bayIds, placement.bayIds);
+    const same =
+      sameWork && sameMembers(crewIds(issued), crewIds(placement)) && sameList(issued.bayIds, placement.bayIds);
     if (!same) found.push(unmet('freeze', { stageIds: [stage.id], by: Math.abs(workStart(placement) - start) }));
   }
   return found;

@@ -9,7 +9,8 @@ export function comparePlans(before: Plan, after: Plan): PlanChange[] {
   const inOrder = (placements: Iterable<Placement>): Placement[] =>
     [...placements].sort((a, b) => startOf(a) - startOf(b) || (a.stageId < b.stageId ? -1 : 1));
   for (const placement of inOrder(was.values())) {
-    if (!is.has(placement.stageId)) changes.push({ kind: 'removed', stageId: placement.stageId, start: startOf(placement) });
+    if (!is.has(placement.stageId))
+      changes.push({ kind: 'removed', stageId: placement.stageId, start: startOf(placement) });
   }
   for (const placement of inOrder(is.values())) {
     const old = was.get(placement.stageId);

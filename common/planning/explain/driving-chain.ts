@@ -13,13 +13,16 @@ export function drivingChain(problem: Problem, plan: Plan, keyDateId: string): D
   if (!date) throw new Error(`There is no key date ${keyDateId}.`);
   const explainer = new Explainer(problem, plan);
   const { compiled, layout } = explainer;
-  const placed = date.stageIds.map((id) => compiled.stageIndex.get(id) ?? -1).filter((stage) => stage >= 0 && layout.isPlaced[stage] === 1);
-  if (placed.length === 0) return { keyDateId, finish: problem.horizon.end, marginMinutes: date.at - problem.horizon.end, steps: [] };
+  const placed = date.stageIds
+    .map((id) => compiled.stageIndex.get(id) ?? -1)
+    .filter((stage) => stage >= 0 && layout.isPlaced[stage] === 1);
+  if (placed.length === 0)
+    return { keyDateId, finish: problem.horizon.end, marginMinutes: date.at - problem.horizon.end, steps: [] };
   const last = placed.reduce((a, b) => (layout.finish[b] > layout.finish[a] ? b : a));
   const finish = layout.finish[last] + compiled.origin;
   const steps: ChainStep[] = [];
   const seen = new Set<number>();
-  for (let stage = last; stage >= 0 && !seen.has(stage); ) {
+  for (let stage = last; stage >= 0 && !seen.has(stage);) {
     seen.add(stage);
     let next = -1;
     for (const because of explainer.reasonsFor(stage)) {

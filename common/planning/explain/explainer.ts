@@ -88,10 +88,13 @@ export class Explainer {
       if (this.layout.isPlaced[before] === 0 || kind === FINISH_FINISH || kind === START_FINISH) continue;
       const ref = this.firstEnd(link, before);
       const gap = links.minGap[link];
-      const until = this.instant(links.isWorking[link] === 1 ? this.compiled.workingClock.earliestAfter(ref, gap) : ref + gap);
+      const until = this.instant(
+        links.isWorking[link] === 1 ? this.compiled.workingClock.earliestAfter(ref, gap) : ref + gap,
+      );
       const stageId = this.compiled.stages[before].id;
       if (gap !== 0 || kind === START_START) found.push({ kind: 'gap-after', stageId, gapMinutes: gap, until });
-      else if (links.afterWork[link] === 0 && work.dwellAge[before] > 0) found.push({ kind: 'dwell-before', stageId, until });
+      else if (links.afterWork[link] === 0 && work.dwellAge[before] > 0)
+        found.push({ kind: 'dwell-before', stageId, until });
       else found.push({ kind: 'work-before', stageId, until });
     }
     const low = Math.max(...found.map((reason) => reason.until));
@@ -145,8 +148,15 @@ export class Explainer {
       minutes += layout.spanPool[k + 1] - layout.spanPool[k];
     }
     return {
-      stage, crew: layout.crew[stage], housing: layout.housing[stage], minutes, overtime: this.worksOvertime(stage),
-      lowStart: 0, lowEnd: this.lowEndByLinks(stage), lowFinish: -NEVER, lastStart: NEVER,
+      stage,
+      crew: layout.crew[stage],
+      housing: layout.housing[stage],
+      minutes,
+      overtime: this.worksOvertime(stage),
+      lowStart: 0,
+      lowEnd: this.lowEndByLinks(stage),
+      lowFinish: -NEVER,
+      lastStart: NEVER,
     };
   }
 
@@ -192,7 +202,8 @@ export class Explainer {
     const at = this.instant(until);
     for (const bay of ask.housing ?? []) {
       const open = bay >= 0 ? this.compiled.bays.open[bay] : null;
-      if (open && !open.covers(until - 1, until)) return { kind: 'bay-closed', bayId: this.compiled.bayIds[bay], until: at };
+      if (open && !open.covers(until - 1, until))
+        return { kind: 'bay-closed', bayId: this.compiled.bayIds[bay], until: at };
     }
     const crew = ask.crew;
     for (let k = 0; crew && k < crew.makers.length; k += 1) {
@@ -211,7 +222,12 @@ export class Explainer {
       const link = links.inLinks[k];
       const kind = links.kind[link];
       if ((kind !== FINISH_FINISH && kind !== START_FINISH) || this.layout.isPlaced[links.from[link]] === 0) continue;
-      return { kind: 'gap-after', stageId: this.compiled.stages[links.from[link]].id, gapMinutes: links.minGap[link], until };
+      return {
+        kind: 'gap-after',
+        stageId: this.compiled.stages[links.from[link]].id,
+        gapMinutes: links.minGap[link],
+        until,
+      };
     }
     return null;
   }
@@ -231,8 +247,11 @@ export class Explainer {
         const until = this.instant(bookings.ends[i]);
         if (found && found.until >= until) break;
         found = {
-          kind: 'crew-busy', makerId: this.compiled.makerIds[maker], craftId: this.compiled.craftIds[ask.crew.crafts[k]] ?? '',
-          stageId: this.compiled.stages[bookings.stages[i]].id, until,
+          kind: 'crew-busy',
+          makerId: this.compiled.makerIds[maker],
+          craftId: this.compiled.craftIds[ask.crew.crafts[k]] ?? '',
+          stageId: this.compiled.stages[bookings.stages[i]].id,
+          until,
         };
         break;
       }
@@ -258,18 +277,25 @@ export class Explainer {
       const ref = startBinds ? trial.start : links.afterWork[link] === 1 ? trial.end : trial.finish;
       const target = kind === FINISH_START || kind === START_START ? layout.start[after] : layout.end[after];
       let latest = links.maxGap[link] < NEVER ? ref + links.maxGap[link] : NEVER;
-      if (links.isWorking[link] === 1 && latest < NEVER) latest = this.compiled.workingClock.latestAfter(ref, links.maxGap[link]);
+      if (links.isWorking[link] === 1 && latest < NEVER)
+        latest = this.compiled.workingClock.latestAfter(ref, links.maxGap[link]);
       if (kind === FINISH_START && links.afterWork[link] === 0 && work.windowKind[stage] !== NO_WINDOW) {
-        latest = Math.min(latest, curedBy(this.compiled, stage, layout.housing[stage], trial.end, work.windowAge[stage] + 1) - 1);
+        latest = Math.min(
+          latest,
+          curedBy(this.compiled, stage, layout.housing[stage], trial.end, work.windowAge[stage] + 1) - 1,
+        );
       }
       if (latest < target) {
-        return { kind: 'held-for-window', stageId: this.compiled.stages[after].id, until: this.instant(layout.start[stage]) };
+        return {
+          kind: 'held-for-window',
+          stageId: this.compiled.stages[after].id,
+          until: this.instant(layout.start[stage]),
+        };
       }
     }
     return null;
   }
 }
-
 
 /**
  * Turns, latest first, as a person would tell them: what bound last in full, then each piece of other work that stood in the way

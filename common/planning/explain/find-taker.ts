@@ -43,7 +43,8 @@ function whoLeavesAt(layout: Layout, except: number, bay: number, instant: numbe
     if (stage === except || layout.isPlaced[stage] === 0 || !housing) continue;
     for (let k = 0; k < housing.length; k += 1) {
       if (housing[k] !== bay) continue;
-      if (holdEnd(layout, stage, work.placeOf[stage] + k, layout.end[stage], layout.finish[stage]) === instant) return stage;
+      if (holdEnd(layout, stage, work.placeOf[stage] + k, layout.end[stage], layout.finish[stage]) === instant)
+        return stage;
     }
   }
   return -1;

@@ -24,7 +24,14 @@ export class DayLoad {
   add(stage: number, sign: 1 | -1): void {
     const { layout } = this;
     if (layout.compiled.work.fixity[stage] === FINISHED) return;
-    this.addSpans(layout.compiled, layout.crew[stage]?.crafts, layout.spanPool, layout.spanAt[stage], layout.spanCount[stage], sign);
+    this.addSpans(
+      layout.compiled,
+      layout.crew[stage]?.crafts,
+      layout.spanPool,
+      layout.spanAt[stage],
+      layout.spanCount[stage],
+      sign,
+    );
   }
 
   /** The same for spans that are not in the layout yet. */
@@ -40,7 +47,8 @@ export class DayLoad {
     for (let k = from, left = count; left > 0; k += 2, left -= 1) {
       for (let day = this.dayAt(spans[k]); day < this.dayCount && this.dayStarts[day] < spans[k + 1]; day += 1) {
         const minutes = Math.min(spans[k + 1], this.dayEnds[day]) - Math.max(spans[k], this.dayStarts[day]);
-        if (minutes > 0) for (const craft of crafts) if (craft >= 0) this.bump(craft * this.dayCount + day, sign * minutes);
+        if (minutes > 0)
+          for (const craft of crafts) if (craft >= 0) this.bump(craft * this.dayCount + day, sign * minutes);
       }
     }
   }

@@ -98,7 +98,8 @@ export class Scorer {
     let cost = 0;
     for (let link = 0; link < links.count; link += 1) {
       const from = links.from[link];
-      if (work.windowKind[from] !== SOFT_WINDOW || links.kind[link] !== FINISH_START || links.afterWork[link] === 1) continue;
+      if (work.windowKind[from] !== SOFT_WINDOW || links.kind[link] !== FINISH_START || links.afterWork[link] === 1)
+        continue;
       const to = links.to[link];
       if (layout.isPlaced[from] === 0 || layout.isPlaced[to] === 0) continue;
       if (layout.start[to] > layout.windowEnd(from)) cost += work.windowCost[from];

@@ -39,7 +39,9 @@ export function makerLoad(problem: Problem, plan: Plan): LoadRow[] {
       if (load) for (const span of workLeft(stage, placement)) spread(problem, load, span, 1);
     }
   });
-  return byId(problem.makers).map((maker) => toRow(problem, maker.id, asked.get(maker.id), shiftMinutes(problem, [maker])));
+  return byId(problem.makers).map((maker) =>
+    toRow(problem, maker.id, asked.get(maker.id), shiftMinutes(problem, [maker])),
+  );
 }
 
 /**
@@ -48,7 +50,9 @@ export function makerLoad(problem: Problem, plan: Plan): LoadRow[] {
  */
 export function bayLoad(problem: Problem, plan: Plan): LoadRow[] {
   const asked = new Map(problem.bays.map((bay) => [bay.id, new Float64Array(problem.days.length)]));
-  const ends = new Map(plan.placements.map((placement) => [placement.stageId, placement.work[placement.work.length - 1]?.end]));
+  const ends = new Map(
+    plan.placements.map((placement) => [placement.stageId, placement.work[placement.work.length - 1]?.end]),
+  );
   forEachPlaced(problem, plan, (stage, placement) => {
     stage.places.forEach((place, i) => {
       const load = asked.get(placement.bayIds[i]);
@@ -100,7 +104,11 @@ function spread(problem: Problem, minutes: Float64Array, span: Span, units: numb
 }
 
 function toRow(problem: Problem, id: string, load: Float64Array | undefined, capacity: Float64Array): LoadRow {
-  const cells = problem.days.map((day, d) => ({ day: day.day, loadMinutes: load?.[d] ?? 0, capacityMinutes: capacity[d] }));
+  const cells = problem.days.map((day, d) => ({
+    day: day.day,
+    loadMinutes: load?.[d] ?? 0,
+    capacityMinutes: capacity[d],
+  }));
   return { id, cells };
 }
 

@@ -9,7 +9,9 @@ import { unevenness } from './unevenness';
 
 /** The parts of the objective of a plan, given what the checker says of it. */
 export function measure(problem: Problem, plan: Plan, unmet: readonly Unmet[]): Objective {
-  const placed = new Map(plan.placements.filter((placement) => placement.work.length > 0).map((placement) => [placement.stageId, placement]));
+  const placed = new Map(
+    plan.placements.filter((placement) => placement.work.length > 0).map((placement) => [placement.stageId, placement]),
+  );
   return {
     unplaced: unmet.filter((one) => one.rule !== 'key-date').length,
     hardLateness: weightedLateness(problem, placed, 'hard'),

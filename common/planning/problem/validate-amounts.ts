@@ -9,12 +9,18 @@ export function findAmountFaults(problem: Problem): Fault[] {
   const { changePenaltyMinor, unevenness, earliness } = problem.weights;
   faults.push(...amountFaults('weights', [changePenaltyMinor, unevenness, earliness]));
   for (const maker of problem.makers) {
-    faults.push(...spanFaults(`shifts of ${maker.id}`, maker.shifts), ...spanFaults(`overtime of ${maker.id}`, maker.overtime));
+    faults.push(
+      ...spanFaults(`shifts of ${maker.id}`, maker.shifts),
+      ...spanFaults(`overtime of ${maker.id}`, maker.overtime),
+    );
     const paces = maker.crafts.map((craft) => craft.pacePermille);
     faults.push(...amountFaults(`maker ${maker.id}`, [maker.hourCostMinor, maker.overtimeHourCostMinor, ...paces]));
   }
   for (const bay of problem.bays) {
-    faults.push(...amountFaults(`bay ${bay.id}`, [bay.capacity]), ...spanFaults(`opening of ${bay.id}`, bay.open ?? []));
+    faults.push(
+      ...amountFaults(`bay ${bay.id}`, [bay.capacity]),
+      ...spanFaults(`opening of ${bay.id}`, bay.open ?? []),
+    );
   }
   for (const profile of problem.advances) {
     faults.push(...amountFaults(`advance ${profile.id}`, profile.permille));
@@ -25,7 +31,10 @@ export function findAmountFaults(problem: Problem): Fault[] {
   }
   for (const stage of problem.stages) faults.push(...stageFaults(stage));
   for (const date of problem.keyDates) {
-    faults.push(...wholeFaults(`key date ${date.id}`, [date.at]), ...amountFaults(`key date ${date.id}`, [date.weight]));
+    faults.push(
+      ...wholeFaults(`key date ${date.id}`, [date.at]),
+      ...amountFaults(`key date ${date.id}`, [date.weight]),
+    );
   }
   for (const link of problem.links) {
     const where = `link ${link.fromStageId} to ${link.toStageId}`;
@@ -52,7 +61,12 @@ function stageFaults(stage: Stage): Fault[] {
   faults.push(...wholeFaults(where, progress.kind === 'to-do' ? instants : [...instants, progress.start]));
   if (progress.kind === 'finished') faults.push(...spanFaults(`work of ${stage.id}`, [progress]));
   for (const need of stage.crew) {
-    const wrong = !(Number.isInteger(need.least) && Number.isInteger(need.most) && need.least >= 1 && need.most >= need.least);
+    const wrong = !(
+      Number.isInteger(need.least) &&
+      Number.isInteger(need.most) &&
+      need.least >= 1 &&
+      need.most >= need.least
+    );
     if (wrong) faults.push({ kind: 'crew-bounds', stageId: stage.id, craftId: need.craftId });
   }
   return faults;
@@ -64,7 +78,8 @@ function spanFaults(where: string, spans: readonly Span[]): Fault[] {
     spans.flatMap((span) => [span.start, span.end]),
   );
   if (spans.some((span) => span.end < span.start)) faults.push({ kind: 'reversed-span', where });
-  else if (spans.some((span, i) => i > 0 && span.start < spans[i - 1].end)) faults.push({ kind: 'spans-out-of-order', where });
+  else if (spans.some((span, i) => i > 0 && span.start < spans[i - 1].end))
+    faults.push({ kind: 'spans-out-of-order', where });
   return faults;
 }
 

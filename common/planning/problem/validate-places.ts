@@ -7,7 +7,8 @@ export function findPlaceFaults(problem: Problem): Fault[] {
   const capacity = new Map(problem.bays.map((bay) => [bay.id, bay.capacity]));
   const stages = new Map(problem.stages.map((stage) => [stage.id, stage]));
   const followers = new Map<string, string[]>();
-  for (const link of problem.links) followers.set(link.fromStageId, [...(followers.get(link.fromStageId) ?? []), link.toStageId]);
+  for (const link of problem.links)
+    followers.set(link.fromStageId, [...(followers.get(link.fromStageId) ?? []), link.toStageId]);
   for (const stage of problem.stages) {
     stage.places.forEach((need, place) => {
       const largest = Math.max(0, ...need.bayIds.map((id) => capacity.get(id) ?? 0));
