@@ -80,7 +80,7 @@ export default defineConfig(
   { linterOptions: { reportUnusedDisableDirectives: 'error' } },
   {
     files: ['**/*.{ts,mjs}'],
-    ignores: ['eslint.config.mjs'],
+    ignores: ['eslint.config.mjs', 'client/proxy.conf.mjs'],
     extends: [eslint.configs.recommended, tseslint.configs.recommendedTypeChecked],
     languageOptions: { parserOptions: { projectService: true, tsconfigRootDir: import.meta.dirname } },
     rules: {

@@ -3,5 +3,4 @@ const target = `http://127.0.0.1:${process.env['PORT'] ?? '4300'}`;
 
 export default {
   '/api': { target, changeOrigin: false },
-  '/feeds': { target, changeOrigin: false },
 };

@@ -1,4 +1,5 @@
-import type { Bay, Dwell, Link, Maker, Problem, Span, Stage, StudioDay } from '@common/planning';
+import type { Bay, Dwell, Link, Maker, Problem, Stage, StudioDay } from '@common/planning';
+import type { Span } from '@common/time/span';
 import { seededRandom } from './seeded-random';
 
 /** Monday 2026-01-05, 00:00 UTC, in minutes since 1970. */

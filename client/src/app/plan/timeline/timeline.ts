@@ -15,40 +15,30 @@ import {
   untracked,
   viewChild,
 } from '@angular/core';
-import { formatDayAndTime } from '@common/time/format-instant';
 import type { Minute } from '@common/time/span';
 import { MarkChip } from '../../ui/mark-chip';
 import { PlanStore } from '../plan-store';
-import { sayMargin } from '../wording/say-margin';
 import { sayRefusal } from '../wording/say-refusal';
 import { sayStage } from '../wording/say-stage';
+import { awayBands, type Band } from './away-bands';
 import { BoardStore, HEAD } from './board-store';
-import { FLAG_HEIGHT, type LaidRow, type LaidTape, LEAST_TAPE_WIDTH, TAPE_HEIGHT } from './engine/board-layout';
+import { type LaidRow, type LaidTape, TAPE_HEIGHT } from './engine/board-layout';
 import { rowAt, rowsIn, tapesIn, tapesOf } from './engine/board-window';
 import { edgeSpeed } from './engine/edge-scroll';
 import { flagLines } from './engine/flags';
-import { type TapeKey, walk, type WalkStep } from './engine/focus-walk';
-import { unlitStretches } from './engine/lit-time';
-import { flagPath } from './engine/shapes';
+import { type TapeKey, walk } from './engine/focus-walk';
 import { holdable } from './engine/take-targets';
 import { minuteAt, scrollToShow, xOf } from './engine/time-scale';
-import type { MarkedFlag } from './flag-inputs';
 import { type HandPoint, HoldByPointer } from './hold-by-pointer';
 import { HoldStore } from './hold-store';
+import { outlineOfFlag, type PlacedFlag, titleOfFlag } from './placed-flag';
 import { RuleHead } from './rule-head';
+import { scrollToTape } from './scroll-to-tape';
 import { TapeMark } from './tape-mark';
+import { answerHoldingKey, walkStepOf } from './timeline-keys';
 
 /** Width of the row heads in pixels, on a desk. */
 export const HEAD_WIDTH = 188;
-
-const STEPS: Readonly<Record<string, WalkStep>> = {
-  ArrowLeft: 'earlier',
-  ArrowRight: 'later',
-  ArrowUp: 'above',
-  ArrowDown: 'below',
-  Home: 'row-start',
-  End: 'row-end',
-};
 
 /** The wall itself: the rule at its head, rows with their tapes, flags, the plumb line of now, and what is in the hand. */
 @Component({
@@ -230,32 +220,15 @@ export class Timeline {
   }
 
   protected flagOutline(flag: PlacedFlag): string {
-    const late = flag.marginMinutes !== null && flag.marginMinutes < 0;
-    return flagPath(flag.width, FLAG_HEIGHT, { strength: flag.strength, late });
+    return outlineOfFlag(flag);
   }
 
   protected flagTitle(flag: PlacedFlag): string {
-    const names = this.plan.names();
-    const strength = flag.strength === 'hard' ? 'hard date' : 'wished date';
-    const when = formatDayAndTime(flag.at, this.board.zone());
-    return `${names?.keyDateInFull(flag.keyDateId)}, ${when}, ${strength}, ${sayMargin(flag.marginMinutes)}`;
+    return titleOfFlag(flag, this.plan.names(), this.board.zone());
   }
 
-  /** A maker's leave, a bay's closed hours: dark in a row while the studio is lit. */
-  protected awayOf(row: LaidRow): readonly { readonly x: number; readonly width: number }[] {
-    const lit = row.row.lit;
-    if (lit === null) return [];
-    const { left, right } = this.board.drawn();
-    const scale = this.board.scale();
-    const frame = { start: minuteAt(scale, left), end: minuteAt(scale, right) };
-    const away = unlitStretches(frame, lit).filter((span) => span.end - span.start > 90);
-    return this.board
-      .lit()
-      .flatMap((light) =>
-        away.map((dark) => ({ start: Math.max(light.start, dark.start), end: Math.min(light.end, dark.end) })),
-      )
-      .filter((span) => span.end - span.start > 30)
-      .map((span) => ({ x: xOf(scale, span.start), width: xOf(scale, span.end) - xOf(scale, span.start) }));
+  protected awayOf(row: LaidRow): readonly Band[] {
+    return awayBands(row, this.board);
   }
 
   protected click(laid: LaidTape): void {
@@ -293,7 +266,7 @@ export class Timeline {
   }
 
   protected keydown(event: KeyboardEvent, laid: LaidTape): void {
-    const handled = this.hand.holding() ? this.keyWhileHolding(event) : this.keyWhileWalking(event, laid);
+    const handled = this.hand.holding() ? answerHoldingKey(event, this.hand) : this.keyWhileWalking(event, laid);
     if (handled) event.preventDefault();
   }
 
@@ -303,33 +276,11 @@ export class Timeline {
       this.holdByKeys(laid.tape.stageId);
       return true;
     }
-    const step = event.ctrlKey ? { Home: 'first' as const, End: 'last' as const }[event.key] : STEPS[event.key];
+    const step = walkStepOf(event);
     if (!step) return false;
     const next = walk(this.board.layout(), { rowKey: laid.rowKey, stageId: laid.tape.stageId }, step);
     if (next) this.focusTape(next);
     return true;
-  }
-
-  private keyWhileHolding(event: KeyboardEvent): boolean {
-    switch (event.key) {
-      case 'ArrowLeft':
-      case 'ArrowRight': {
-        const direction = event.key === 'ArrowLeft' ? -1 : 1;
-        if (event.shiftKey) this.hand.nudgeDays(direction);
-        else this.hand.nudge(direction);
-        return true;
-      }
-      case 'ArrowUp':
-      case 'ArrowDown':
-        this.hand.nudgeRow(event.key === 'ArrowUp' ? -1 : 1);
-        return true;
-      case 'Enter':
-      case ' ':
-        void this.hand.drop();
-        return true;
-      default:
-        return false;
-    }
   }
 
   private drawnTapes(row: LaidRow): readonly LaidTape[] {
@@ -413,14 +364,7 @@ export class Timeline {
   }
 
   private bringIntoWindow(laid: LaidTape): void {
-    const wall = this.scroller().nativeElement;
-    const room = Math.max(100, wall.clientWidth - HEAD_WIDTH);
-    const height = wall.clientHeight - this.headHeight();
-    const grip = Math.min(laid.width, room / 2);
-    if (laid.x < wall.scrollLeft + LEAST_TAPE_WIDTH) wall.scrollLeft = Math.max(0, laid.x - 60);
-    else if (laid.x + grip > wall.scrollLeft + room) wall.scrollLeft = laid.x + grip - room + 80;
-    if (laid.y < wall.scrollTop) wall.scrollTop = Math.max(0, laid.y - 40);
-    else if (laid.y + TAPE_HEIGHT > wall.scrollTop + height) wall.scrollTop = laid.y + TAPE_HEIGHT - height + 40;
+    scrollToTape(this.scroller().nativeElement, laid, { width: HEAD_WIDTH, height: this.headHeight() });
     this.look();
   }
 
@@ -450,8 +394,6 @@ export class Timeline {
     });
   }
 }
-
-type PlacedFlag = MarkedFlag & { readonly x: number; readonly width: number; readonly lane: number };
 
 function domKey(laid: LaidTape): string {
   return `${laid.rowKey}|${laid.tape.stageId}`;
