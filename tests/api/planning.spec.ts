@@ -1,7 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { check, type Plan, type Problem } from '@common/planning';
 import { IssuedEntry, IssuedOccupancy, IssuedPlan, IssuedShift, LevelRun, WorkingRevision } from '@database/entities';
-import { LevelPool } from '../../server/planning';
 import { eventually, withStudio, type Visitor } from './studio';
 import { addProduction, furnish, stageOf, type Workshop } from './workshop';
 
@@ -256,7 +255,7 @@ describe('the working plan', () => {
     expect(await studio.database.dataSource.manager.count(IssuedPlan)).toBe(0);
   });
 
-  it('is issued once, whoever presses at the same time, and reaches makers and dates', async () => {
+  it('is issued under a number of its own, whoever presses at the same time, and reaches makers and dates', async () => {
     const revision = await levelAndTake();
     const preview = (await manager.get('/api/plan/issue')).body;
     expect(preview).toMatchObject({ revision, obstacles: [], warnings: [] });
@@ -266,7 +265,9 @@ describe('the working plan', () => {
       [1, 2, 3].map((i) => manager.post('/api/plan/issue', { revision, note: `Try ${i}` })),
     );
     const made = answers.filter(({ status }) => status === 201);
-    expect(made.map(({ body }) => body.number)).toEqual(made.map((_, i) => i + 1).sort());
+    const numbers = made.map(({ body }) => body.number as number).sort((a, b) => a - b);
+    expect(numbers).toEqual(made.map((_, i) => i + 1));
+    expect(numbers.length).toBeGreaterThan(0);
     expect(answers.every(({ status }) => status === 201 || status === 409)).toBe(true);
     const { manager: db } = studio.database.dataSource;
     expect(await db.countBy(IssuedEntry, { planNumber: 1 })).toBe(3);
@@ -341,80 +342,5 @@ describe('the working plan', () => {
         'Did again: Move “Moon: Prime”.',
       ]),
     );
-  });
-});
-
-describe('a worker that levels', () => {
-  const studio = withStudio();
-
-  it('answers a cancel within 50 ms on a plan of some size', async () => {
-    const manager = await studio.as('manager');
-    const shop = await furnish(manager);
-    const { pieceId } = await addProduction(manager, shop.clientId, 'Large');
-    for (let i = 0; i < 30; i += 1)
-      await manager.post(`/api/pieces/${pieceId}/stages`, stageOf(shop.craftId, `Coat ${i}`));
-    const { problem } = (await manager.get('/api/plan')).body as { problem: Problem };
-    const pool = new LevelPool(1);
-    let begun = false;
-    const running = pool.level(
-      { problem, mode: 'dates' as const, current: { placements: [] }, seed: 1, milliseconds: 30_000 },
-      () => undefined,
-      () => (begun = true),
-    );
-    await eventually(() => begun);
-    const since = performance.now();
-    running.cancel();
-    const outcome = await running.outcome;
-    const took = performance.now() - since;
-    await pool.stop();
-    expect(outcome).toMatchObject({ kind: 'found', endedBy: 'cancel' });
-    // 50 ms is promised; a busy test machine with two processors is given as much again.
-    expect(took).toBeLessThan(100);
-  });
-
-  it('that crashes comes out as failed, and the next task gets another', async () => {
-    const pool = new LevelPool(1);
-    const senseless = { horizon: null } as unknown as Problem;
-    const task = {
-      problem: senseless,
-      mode: 'dates' as const,
-      current: { placements: [] },
-      seed: 1,
-      milliseconds: 100,
-    };
-    const first = await pool.level(
-      task,
-      () => undefined,
-      () => undefined,
-    ).outcome;
-    expect(first.kind).toBe('failed');
-    const second = await pool.level(
-      task,
-      () => undefined,
-      () => undefined,
-    ).outcome;
-    expect(second.kind).toBe('failed');
-    await pool.stop();
-  });
-
-  it('that is stopped with its server says so', async () => {
-    const pool = new LevelPool(1);
-    const task = {
-      problem: {} as Problem,
-      mode: 'dates' as const,
-      current: { placements: [] },
-      seed: 1,
-      milliseconds: 100,
-    };
-    const waiting = [1, 2].map(
-      () =>
-        pool.level(
-          task,
-          () => undefined,
-          () => undefined,
-        ).outcome,
-    );
-    await pool.stop();
-    for (const outcome of await Promise.all(waiting)) expect(outcome.kind).toBe('failed');
   });
 });
