@@ -116,15 +116,11 @@ describe('importing stages', () => {
     expect((await send('字'.repeat(1_400_000), 'try')).status).toBe(200);
   });
 
-  it('takes 10,000 rows within seconds, and all of them', async () => {
+  it('takes 10,000 rows, all of them', async () => {
     const rows = Array.from({ length: 10_000 }, (_, index) => `Swarm ${index % 40},Stage ${index},carving,1,`);
-    const since = Date.now();
     const body = bodyOf(StageImportResult, await send([HEAD, ...rows].join('\n'), 'take'));
-    const seconds = (Date.now() - since) / 1000;
     expect(body).toEqual({ pieces: 40, stages: 10_000, faults: [], taken: true });
     expect(await stagesOf('Swarm 7')).toHaveLength(250);
-    // What it takes on an idle machine is a sixth of this.
-    expect(seconds).toBeLessThan(60);
   }, 120_000);
 });
 
