@@ -1,0 +1,56 @@
+import type { Locator, Page } from 'playwright-core';
+import { WorkingPlanView } from '@common/contract';
+import { DEMO_PASSWORD } from '@database/demo/seed-accounts';
+
+/** Signs one of the demo's people in and waits for the page that they land on. */
+export async function signIn(page: Page, url: string, person: string, landing: string): Promise<void> {
+  await page.goto(url);
+  await page.getByLabel('E-mail').fill(`${person}@example.test`);
+  await page.getByLabel('Password').fill(DEMO_PASSWORD);
+  await page.getByRole('button', { name: 'Sign in', exact: true }).click();
+  await page.waitForURL(`**${landing}**`);
+}
+
+/** The working plan as the page's own session reads it. */
+export async function readPlan(page: Page): Promise<WorkingPlanView> {
+  const answer = await page.request.get(new URL('/api/plan', page.url()).href);
+  return WorkingPlanView.parse(await answer.json());
+}
+
+/** Key dates that a plan misses, by id. */
+export function missedDates(view: WorkingPlanView): readonly string[] {
+  return view.unmet.flatMap(({ rule, keyDateId }) => (rule === 'key-date' && keyDateId !== null ? [keyDateId] : []));
+}
+
+/** The tapes on the wall, in the order in which they are drawn. */
+export function tapes(page: Page): Locator {
+  return page.locator('button[data-tape]');
+}
+
+/** The tape of one stage. */
+export function tapeOf(page: Page, stageId: string): Locator {
+  return page.locator(`button[data-tape$="|${stageId}"]`).first();
+}
+
+/** A stage that a hand can move, whole in the window and clear of its edges: not begun, tied to no instant, two hours at least. */
+export async function movableStage(page: Page, view: WorkingPlanView): Promise<string> {
+  const stages = new Map(view.problem.stages.map((stage) => [stage.id, stage]));
+  const placements = new Map(view.plan.placements.map((placement) => [placement.stageId, placement]));
+  for (const tape of await tapes(page).all()) {
+    const stageId = (await tape.getAttribute('data-tape'))?.split('|')[1] ?? '';
+    const [stage, start] = [stages.get(stageId), placements.get(stageId)?.work[0].start ?? 0];
+    const isFree = stage?.progress.kind === 'to-do' && stage.fixedStart === null && stage.crew.length > 0;
+    const box = await tape.boundingBox();
+    if (!isFree || !box || start < view.now + 60 || stage.effort.minutes < 120) continue;
+    if (box.x > 220 && box.x + 320 < 1000 && box.y > 200 && box.y < 640 && box.width > 30) return stageId;
+  }
+  throw new Error('No stage in the window can be moved.');
+}
+
+/** Levels by the buttons, waits for the comparison and takes it. */
+export async function levelAndTake(page: Page): Promise<void> {
+  await page.getByRole('button', { name: 'Level', exact: true }).click();
+  await page.getByRole('button', { name: 'Take it' }).click({ timeout: 30_000 });
+  await page.getByRole('dialog').waitFor({ state: 'hidden' });
+  await page.getByRole('button', { name: 'Undo' }).and(page.locator(':enabled')).waitFor();
+}
