@@ -54,3 +54,12 @@ export async function levelAndTake(page: Page): Promise<void> {
   await page.getByRole('dialog').waitFor({ state: 'hidden' });
   await page.getByRole('button', { name: 'Undo' }).and(page.locator(':enabled')).waitFor();
 }
+
+/** Waits until something is so; an error after five seconds. */
+export async function expectSoon(isSo: () => Promise<boolean>): Promise<void> {
+  for (let tries = 0; tries < 50; tries += 1) {
+    if (await isSo()) return;
+    await new Promise((resolve) => setTimeout(resolve, 100));
+  }
+  throw new Error('It did not come to be within five seconds.');
+}
