@@ -5,7 +5,8 @@ import { createApp } from './app';
 import type { Config } from './config';
 import { createLog, type Log } from './http/log';
 import { LiveHub } from './live';
-import { LevelPool, LevelRuns } from './planning';
+import { JobPool } from './jobs/job-pool';
+import { LevelRuns } from './planning';
 import { keepSessions } from './session';
 import { ProcessMark } from './storage/process-mark';
 import { Transactions } from './storage/transactions';
@@ -42,8 +43,8 @@ export async function compose(
   const live = new LiveHub(config.databaseUrl, log, new ProcessMark());
   await live.start();
   const transactions = new Transactions(dataSource, log, clock);
-  const levelPool = new LevelPool(config.levelWorkers ?? undefined);
-  const levelRuns = new LevelRuns(transactions, levelPool, live, log);
+  const jobPool = new JobPool(config.engineWorkers ?? undefined);
+  const levelRuns = new LevelRuns(transactions, jobPool, live, log);
   await levelRuns.failLeftBehind();
   let isReady = true;
   const app = createApp({

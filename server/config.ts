@@ -18,7 +18,7 @@ const Environment = z.object({
     .refine(isOnThisMachine, 'must be on this machine, such as http://127.0.0.1:4399')
     .optional(),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
-  LEVEL_WORKERS: z.coerce.number().int().min(1).max(16).optional(),
+  ENGINE_WORKERS: z.coerce.number().int().min(1).max(16).optional(),
   CLIENT_FOLDER: z.string().min(1).optional(),
 });
 
@@ -33,8 +33,8 @@ export interface Config {
   readonly trustProxyHops: number;
   readonly google: GoogleSettings | null;
   readonly logLevel: z.infer<typeof Environment>['LOG_LEVEL'];
-  /** How many levellings run at once; null for one less than the processors. */
-  readonly levelWorkers: number | null;
+  /** How many levellings and forecasts run at once; null for one less than the processors, two at least. */
+  readonly engineWorkers: number | null;
   /** The built client. */
   readonly clientFolder: string;
   readonly limits: RateLimits;
@@ -92,7 +92,7 @@ export function readConfig(environment: Readonly<Record<string, string | undefin
           }
         : null,
     logLevel: env.LOG_LEVEL,
-    levelWorkers: env.LEVEL_WORKERS ?? null,
+    engineWorkers: env.ENGINE_WORKERS ?? null,
     clientFolder: resolve(env.CLIENT_FOLDER ?? 'dist/client/browser'),
     limits: USUAL_LIMITS,
   };

@@ -9,7 +9,6 @@ import { Proposals } from './proposals';
 import { Revisions } from './revisions';
 import { WorkingPlan } from './working-plan';
 
-export { LevelPool } from './level-pool';
 export { LevelRuns } from './level-runs';
 export { mountPlanning } from './planning-routes';
 export { readIssued } from './snapshot-repository';

@@ -7,6 +7,8 @@ import { buildProblem } from '@common/planning-input';
 import { LevelRun } from '@database/entities';
 import { notFound, Problem } from '../http/problem';
 import type { Log } from '../http/log';
+import type { JobOutcome, JobPool, RunningJob } from '../jobs/job-pool';
+import type { LevelTask } from '../jobs/level-task';
 import type { LiveHub } from '../live';
 import type { Actor } from '../session';
 import { CANCEL_CHANNEL } from '../storage/live-channel';
@@ -14,7 +16,6 @@ import { ProcessMark } from '../storage/process-mark';
 import type { Transactions } from '../storage/transactions';
 import type { Unit } from '../storage/unit';
 import { nameOfContent } from './desk';
-import type { LevelOutcome, LevelPool, LevelTask, RunningLevel } from './level-pool';
 import { isUnderWay, levelRunView, LevelRepository } from './level-repository';
 import { requireDesk } from './revisions';
 import { snapshotOf } from './snapshot';
@@ -32,7 +33,7 @@ const LEFT_BEHIND = 'The server that was levelling ended before it was done. Sta
 
 /** A levelling that this process works on. */
 interface Working {
-  readonly running: RunningLevel;
+  readonly running: RunningJob<'level'>;
   /** Settles once its outcome is written down. */
   readonly written: Promise<void>;
 }
@@ -43,7 +44,7 @@ export class LevelRuns {
 
   constructor(
     private readonly transactions: Transactions,
-    private readonly pool: LevelPool,
+    private readonly pool: JobPool,
     private readonly live: LiveHub,
     private readonly log: Log,
   ) {
@@ -169,15 +170,14 @@ export class LevelRuns {
       Object.assign(run, change);
       writing = writing.then(() => this.#writeDown(run));
     };
-    const running = this.pool.level(
-      task,
-      () => write({ state: 'running' }),
-      ({ schedules, objective, bound }) => {
+    const running = this.pool.run('level', task, {
+      onStart: () => write({ state: 'running' }),
+      onProgress: ({ schedules, objective, bound }) => {
         if (Date.now() - lastTold < TELL_EVERY_MS) return;
         lastTold = Date.now();
         write({ schedules, objective: { ...objective }, bound });
       },
-    );
+    });
     const written = running.outcome.then(async (outcome) => {
       write({ ...changeOf(outcome), endedAt: this.transactions.clock() });
       await writing;
@@ -216,16 +216,17 @@ async function fail(unit: Unit, run: LevelRun, failure: string): Promise<void> {
   await unit.announce({ kind: 'level', run: levelRunView(run) });
 }
 
-function changeOf(outcome: LevelOutcome): Partial<LevelRun> {
+function changeOf(outcome: JobOutcome<'level'>): Partial<LevelRun> {
   if (outcome.kind === 'failed') return { state: 'failed', failure: outcome.failure };
-  const { plan, objective, bound, schedules, stop } = outcome.result;
+  const { result, endedBy } = outcome.found;
+  const { plan, objective, bound, schedules, stop } = result;
   return {
-    state: outcome.endedBy === 'cancel' ? 'cancelled' : 'found',
+    state: endedBy === 'cancel' ? 'cancelled' : 'found',
     found: plan,
     objective: { ...objective },
     bound,
     schedules,
     // What told the engine to stop is known only here.
-    stop: outcome.endedBy === 'search' ? stop : outcome.endedBy,
+    stop: endedBy === 'search' ? stop : endedBy,
   };
 }

@@ -2,61 +2,65 @@ import { existsSync } from 'node:fs';
 import { availableParallelism } from 'node:os';
 import { join } from 'node:path';
 import { Worker } from 'node:worker_threads';
-import type { LevelProgress, Plan, Problem } from '@common/planning';
-import type { LevelResult } from '@common/planning';
-import { PROTOCOL, type LevelEnd, type LevelJob, type LevelMessage } from './level-message';
+import { PROTOCOL, type JobMessage, type JobName, type Jobs, type WorkerMessage } from './job-message';
 
-/** What is to be levelled. */
-export interface LevelTask {
-  readonly problem: Problem;
-  readonly mode: 'dates' | 'within-dates';
-  /** The plan as it stands: what is found is never worse than it. */
-  readonly current: Plan;
-  readonly seed: number;
-  readonly milliseconds: number;
-}
+/** How a job came out; a crash is an outcome too. */
+export type JobOutcome<N extends JobName> =
+  { readonly kind: 'found'; readonly found: Jobs[N]['found'] } | { readonly kind: 'failed'; readonly failure: string };
 
-/** How a levelling came out; a crash is an outcome too. */
-export type LevelOutcome =
-  | { readonly kind: 'found'; readonly result: LevelResult; readonly endedBy: LevelEnd }
-  | { readonly kind: 'failed'; readonly failure: string };
-
-/** A levelling under way. */
-export interface RunningLevel {
-  readonly outcome: Promise<LevelOutcome>;
-  /** Tells it to stop within 50 ms; what it found so far is its outcome. */
+/** A job under way. */
+export interface RunningJob<N extends JobName> {
+  readonly outcome: Promise<JobOutcome<N>>;
+  /** Tells it to stop; what it found so far is its outcome. */
   cancel(): void;
 }
 
-/** Where a task waits for a worker, or has one. */
-interface Seat {
-  readonly job: LevelJob;
-  readonly onStart: () => void;
-  readonly onProgress: (progress: LevelProgress) => void;
-  readonly settle: (outcome: LevelOutcome) => void;
+/** What somebody who asked for a job may want to hear meanwhile. */
+export interface JobListener<N extends JobName> {
+  readonly onStart?: () => void;
+  readonly onProgress?: (progress: Jobs[N]['progress']) => void;
 }
 
-const CANCELLED_WHILE_WAITING: LevelOutcome = { kind: 'failed', failure: 'It was stopped before it began.' };
+/** Where a job waits for a worker, or has one. */
+interface Seat {
+  readonly message: JobMessage;
+  readonly hear: (message: WorkerMessage) => void;
+  readonly onStart: () => void;
+  readonly settle: (outcome: JobOutcome<JobName>) => void;
+}
 
-/** Worker threads that level, as many at once as there are processors to spare; kept for the next task once made. */
-export class LevelPool {
+const CANCELLED_WHILE_WAITING: JobOutcome<JobName> = { kind: 'failed', failure: 'It was stopped before it began.' };
+
+/** At least two: a forecast need not wait for a levelling. */
+const LEAST_WORKERS = 2;
+
+/** Worker threads for the engine, as many at once as there are processors to spare; kept for the next job once made. */
+export class JobPool {
   readonly #waiting: Seat[] = [];
   readonly #idle: Worker[] = [];
   readonly #busy = new Map<Worker, Seat>();
   #stopped = false;
 
   constructor(
-    private readonly size: number = Math.max(1, availableParallelism() - 1),
-    private readonly makeWorker: () => Worker = makeLevelWorker,
+    private readonly size: number = Math.max(LEAST_WORKERS, availableParallelism() - 1),
+    private readonly makeWorker: () => Worker = makeJobWorker,
   ) {}
 
-  /** Starts a task when a worker is free. */
-  level(task: LevelTask, onStart: () => void, onProgress: (progress: LevelProgress) => void): RunningLevel {
+  /** Starts a job when a worker is free. */
+  run<N extends JobName>(name: N, task: Jobs[N]['task'], listener: JobListener<N> = {}): RunningJob<N> {
     const cancel = new SharedArrayBuffer(Int32Array.BYTES_PER_ELEMENT);
-    const job: LevelJob = { ...task, protocol: PROTOCOL, cancel };
+    const message = { protocol: PROTOCOL, name, task, cancel } as JobMessage;
     let seat: Seat | undefined;
-    const outcome = new Promise<LevelOutcome>((settle) => {
-      seat = { job, onStart, onProgress, settle };
+    const outcome = new Promise<JobOutcome<N>>((settle) => {
+      seat = {
+        message,
+        onStart: () => listener.onStart?.(),
+        // A worker answers the job that it was given, so that what it says is of the job's own kind.
+        hear: (said) => {
+          if (said.kind === 'progress') listener.onProgress?.(said.progress);
+        },
+        settle: (found) => settle(found),
+      };
       this.#waiting.push(seat);
     });
     this.#next();
@@ -75,7 +79,7 @@ export class LevelPool {
   /** Ends every worker; what was under way comes out as failed. */
   async stop(): Promise<void> {
     this.#stopped = true;
-    const failure = 'The server stopped while it was levelling. Start it again.';
+    const failure = 'The server stopped while it was at work on this. Start it again.';
     for (const seat of this.#waiting.splice(0)) seat.settle({ kind: 'failed', failure });
     for (const seat of this.#busy.values()) seat.settle({ kind: 'failed', failure });
     await Promise.all([...this.#idle, ...this.#busy.keys()].map((worker) => worker.terminate()));
@@ -88,24 +92,24 @@ export class LevelPool {
     const worker = this.#idle.pop() ?? this.#hire();
     this.#busy.set(worker, seat);
     seat.onStart();
-    worker.postMessage(seat.job);
+    worker.postMessage(seat.message);
   }
 
   #hire(): Worker {
     const worker = this.makeWorker();
     // An idle worker keeps no process alive.
     worker.unref();
-    worker.on('message', (message: LevelMessage) => this.#hear(worker, message));
+    worker.on('message', (message: WorkerMessage) => this.#hear(worker, message));
     worker.on('error', (error) => this.#lose(worker, error instanceof Error ? error.message : String(error)));
     worker.on('exit', (code) => this.#lose(worker, `The worker ended with code ${String(code)}.`));
     return worker;
   }
 
-  #hear(worker: Worker, message: LevelMessage): void {
+  #hear(worker: Worker, message: WorkerMessage): void {
     const seat = this.#busy.get(worker);
     if (!seat || message.protocol !== PROTOCOL) return;
     if (message.kind === 'progress') {
-      seat.onProgress(message.progress);
+      seat.hear(message);
       return;
     }
     this.#busy.delete(worker);
@@ -125,9 +129,9 @@ export class LevelPool {
 }
 
 /** The worker's file as it is built, or as it is written where nothing was built. */
-function makeLevelWorker(): Worker {
-  const built = join(__dirname, 'level-worker.js');
+function makeJobWorker(): Worker {
+  const built = join(__dirname, 'job-worker.js');
   return existsSync(built)
     ? new Worker(built)
-    : new Worker(join(__dirname, 'level-worker.ts'), { execArgv: ['--require', 'tsx/cjs'] });
+    : new Worker(join(__dirname, 'job-worker.ts'), { execArgv: ['--require', 'tsx/cjs'] });
 }

@@ -1,4 +1,3 @@
-import { parentPort } from 'node:worker_threads';
 import {
   check,
   isBetter,
@@ -10,52 +9,55 @@ import {
   type Plan,
   type Problem,
 } from '@common/planning';
-import { PROTOCOL, type LevelEnd, type LevelJob, type LevelMessage } from './level-message';
+import type { JobHooks } from './job-message';
+
+/** What is to be levelled. */
+export interface LevelTask {
+  readonly problem: Problem;
+  /** `dates` levels from the start; `within-dates` evens `current` out. */
+  readonly mode: 'dates' | 'within-dates';
+  /** The plan as it stands: what is found is never worse than it. */
+  readonly current: Plan;
+  readonly seed: number;
+  readonly milliseconds: number;
+}
+
+/** What a levelling found, and why it ended: by itself, by the time it was given, or because it was told to. */
+export interface LevelFound {
+  readonly result: LevelResult;
+  readonly endedBy: LevelEnd;
+}
+export type LevelEnd = 'search' | 'time' | 'cancel';
 
 /** The share of the time after which the search makes way for evening out, which asks the same clock. */
 const SEARCH_SHARE = 0.85;
-const PROGRESS_EVERY_MS = 100;
 const NO_LIMIT = 1_000_000_000;
 
-function say(message: LevelMessage): void {
-  parentPort?.postMessage(message);
-}
-
-function run(job: LevelJob): void {
+/** Levels within the time that the task allows. */
+export function runLevel(task: LevelTask, hooks: JobHooks<'level'>): LevelFound {
   const begun = performance.now();
-  const flag = new Int32Array(job.cancel);
   let endedBy: LevelEnd = 'search';
-  let searchEnded = job.mode === 'within-dates';
-  let lastSaid = -Infinity;
+  let searchEnded = task.mode === 'within-dates';
   const shouldStop = () => {
-    if (Atomics.load(flag, 0) === 1) {
+    if (hooks.isCancelled()) {
       endedBy = 'cancel';
       return true;
     }
     const elapsed = performance.now() - begun;
-    if (!searchEnded && elapsed >= job.milliseconds * SEARCH_SHARE) {
+    if (!searchEnded && elapsed >= task.milliseconds * SEARCH_SHARE) {
       // True once: the engine asks anew when it begins to even out.
       searchEnded = true;
       endedBy = 'time';
       return true;
     }
-    if (elapsed < job.milliseconds) return false;
+    if (elapsed < task.milliseconds) return false;
     endedBy = 'time';
     return true;
   };
-  const options: LevelOptions = {
-    seed: job.seed,
-    maxSchedules: NO_LIMIT,
-    shouldStop,
-    onProgress: (progress) => {
-      if (performance.now() - lastSaid < PROGRESS_EVERY_MS) return;
-      lastSaid = performance.now();
-      say({ protocol: PROTOCOL, kind: 'progress', progress });
-    },
-  };
-  const { problem, current, mode } = job;
+  const options: LevelOptions = { seed: task.seed, maxSchedules: NO_LIMIT, shouldStop, onProgress: hooks.tell };
+  const { problem, current, mode } = task;
   const found = mode === 'dates' ? level(problem, options) : levelWithinDates(problem, current, options);
-  say({ protocol: PROTOCOL, kind: 'found', result: noWorseThan(problem, current, found), endedBy });
+  return { result: noWorseThan(problem, current, found), endedBy };
 }
 
 /** What was found, or the plan as it stands where a search from nothing did not come up to it. */
@@ -65,11 +67,3 @@ function noWorseThan(problem: Problem, current: Plan, found: LevelResult): Level
   if (!isBetter(objective, found.objective, problem.weights)) return found;
   return { ...found, plan: current, objective, unmet, stop: 'nothing-to-improve' };
 }
-
-parentPort?.on('message', (job: LevelJob) => {
-  try {
-    run(job);
-  } catch (error) {
-    say({ protocol: PROTOCOL, kind: 'failed', failure: error instanceof Error ? error.message : String(error) });
-  }
-});

@@ -1,0 +1,41 @@
+import type { ForecastFound, ForecastProgress, ForecastTask } from './forecast-task';
+import type { LevelFound, LevelTask } from './level-task';
+import type { LevelProgress } from '@common/planning';
+
+/** Counts up when a message changes, so that a worker of another build is not misunderstood. */
+export const PROTOCOL = 2;
+
+/** Everything that a worker can be asked, by name: what it is given, what it says on the way, and what it finds. */
+export interface Jobs {
+  readonly level: { readonly task: LevelTask; readonly progress: LevelProgress; readonly found: LevelFound };
+  readonly forecast: {
+    readonly task: ForecastTask;
+    readonly progress: ForecastProgress;
+    readonly found: ForecastFound;
+  };
+}
+export type JobName = keyof Jobs;
+
+/** What a worker is asked to do. `cancel` is one shared word: 1 tells it to stop. */
+export type JobMessage<N extends JobName = JobName> = {
+  readonly [K in N]: {
+    readonly protocol: typeof PROTOCOL;
+    readonly name: K;
+    readonly task: Jobs[K]['task'];
+    readonly cancel: SharedArrayBuffer;
+  };
+}[N];
+
+/** What a worker says of the job that it has. */
+export type WorkerMessage<N extends JobName = JobName> =
+  | { readonly protocol: typeof PROTOCOL; readonly kind: 'progress'; readonly progress: Jobs[N]['progress'] }
+  | { readonly protocol: typeof PROTOCOL; readonly kind: 'found'; readonly found: Jobs[N]['found'] }
+  | { readonly protocol: typeof PROTOCOL; readonly kind: 'failed'; readonly failure: string };
+
+/** What a job is given to work with besides its task. */
+export interface JobHooks<N extends JobName> {
+  /** Whether whoever asked no longer wants it, or only what was found so far. */
+  readonly isCancelled: () => boolean;
+  /** Tells how far it has come; often is fine, only some of it is passed on. */
+  readonly tell: (progress: Jobs[N]['progress']) => void;
+}
