@@ -5,6 +5,7 @@ import type { Api } from './http/api';
 import type { Readiness } from './http/health-routes';
 import type { Log } from './http/log';
 import type { LiveHub } from './live';
+import type { JobPool } from './jobs/job-pool';
 import type { LevelRuns } from './planning';
 import type { Authenticator, SessionKeeping } from './session';
 import type { Transactions } from './storage/transactions';
@@ -17,6 +18,7 @@ export interface AppParts {
   readonly transactions: Transactions;
   readonly sessions: SessionKeeping;
   readonly live: LiveHub;
+  readonly jobPool: JobPool;
   readonly levelRuns: LevelRuns;
   readonly readiness: Readiness;
 }

@@ -54,6 +54,7 @@ export async function compose(
     transactions,
     sessions,
     live,
+    jobPool,
     levelRuns,
     readiness: { isReady: () => isReady },
   });

@@ -3,6 +3,7 @@ import { clientPageEndpoints } from './client-page';
 import { crewEndpoints } from './crew';
 import { daySheetEndpoints } from './day-sheet';
 import { feedEndpoints } from './feeds';
+import { forecastEndpoints } from './forecast';
 import { libraryEndpoints } from './library';
 import { pieceEndpoints } from './pieces';
 import { planningEndpoints } from './planning';
@@ -25,6 +26,7 @@ export const endpoints = {
   ...stageImportEndpoints,
   ...clientPageEndpoints,
   ...planningEndpoints,
+  ...forecastEndpoints,
   ...daySheetEndpoints,
   ...feedEndpoints,
 };

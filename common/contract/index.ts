@@ -15,6 +15,7 @@ export * from './stage-import';
 export * from './client-page';
 export * from './engine-wire';
 export * from './planning';
+export * from './forecast';
 export * from './day-sheet';
 export * from './feeds';
 export * from './live';

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { endpoint, OFFICE, OWNER, WORKSHOP, ById } from './endpoint';
+import { ForecastSettings } from './forecast';
 import { DayRange, Id, Instant, Minutes, Name, StoredDayRange, Version, ZoneName } from './primitives';
 
 /** Weights and limits of the studio; see docs/planning.md for what each does. */
@@ -25,11 +26,12 @@ export const StudioView = z.object({
   zone: z.string(),
   currency: z.string(),
   settings: StudioSettings,
+  forecast: ForecastSettings,
   version: Version,
 });
 export type StudioView = z.infer<typeof StudioView>;
 export const StudioChange = z
-  .object({ name: Name, zone: ZoneName, settings: StudioSettings.partial() })
+  .object({ name: Name, zone: ZoneName, settings: StudioSettings.partial(), forecast: ForecastSettings.partial() })
   .partial()
   .extend({ version: Version });
 

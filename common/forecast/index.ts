@@ -1,5 +1,6 @@
 /** The one public file of the forecast: what a plan's dates are worth when its times are not known for sure. */
 export { forecast } from './forecast';
+export { fanOf } from './fan';
 export type { FinishSpread, Forecast, ForecastOptions, KeyDateForecast } from './forecast';
 export { learnOverrun, PRIOR_OVERRUN } from './learn-overrun';
 export type { PastStage } from './learn-overrun';

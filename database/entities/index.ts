@@ -5,6 +5,7 @@ import { BayOpening } from './bay-opening';
 import { Client } from './client';
 import { Closure } from './closure';
 import { Craft } from './craft';
+import { DateForecast } from './date-forecast';
 import { FeedState } from './feed-state';
 import { FeedToken } from './feed-token';
 import { IssuedEntry } from './issued-entry';
@@ -47,6 +48,7 @@ export * from './bay-opening';
 export * from './client';
 export * from './closure';
 export * from './craft';
+export * from './date-forecast';
 export * from './draft-columns';
 export * from './feed-state';
 export * from './feed-token';
@@ -93,6 +95,7 @@ export const entities = [
   Client,
   Closure,
   Craft,
+  DateForecast,
   FeedState,
   FeedToken,
   IssuedEntry,

@@ -15,6 +15,19 @@ export interface StudioSettingsValue {
   readonly overtimePermille: number;
 }
 
+/** How the forecast draws, checked whole by the contract's `ForecastSettings` before it is written. */
+export interface ForecastSettingsValue {
+  readonly draws: number;
+  readonly learning: 'past-hours' | 'estimates';
+  readonly dwellLowPermille: number;
+  readonly dwellHighPermille: number;
+  readonly replyLowPermille: number;
+  readonly replyHighPermille: number;
+  readonly deliveryLatePermille: number;
+  readonly absencePermille: number;
+  readonly climateSpreadPermille: number;
+}
+
 /** The workshop: one row in each installation, made by the first migration. It also points at the head of the working plan. */
 @Entity({ name: 'studio' })
 @Unique('studio_single_key', ['single'])
@@ -41,6 +54,9 @@ export class Studio {
 
   @Column({ type: 'jsonb' })
   settings: StudioSettingsValue;
+
+  @Column({ type: 'jsonb' })
+  forecast: ForecastSettingsValue;
 
   /** The working revision that stands; null until the first plan is laid out. */
   @Column({ type: 'uuid', nullable: true })

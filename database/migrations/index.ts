@@ -3,6 +3,7 @@ import { AccountsAndAudit1764547202000 } from './1764547202000-accounts-and-audi
 import { WorkToBeDone1764547203000 } from './1764547203000-work-to-be-done';
 import { StudioAndPlans1764547204000 } from './1764547204000-studio-and-plans';
 import { FeedState1764547205000 } from './1764547205000-feed-state';
+import { Forecast1764547206000 } from './1764547206000-forecast';
 
 /** Every migration in its order, listed by hand: a glob would not survive bundling. */
 export const migrations = [
@@ -11,4 +12,5 @@ export const migrations = [
   WorkToBeDone1764547203000,
   StudioAndPlans1764547204000,
   FeedState1764547205000,
+  Forecast1764547206000,
 ] as const;

@@ -1,6 +1,8 @@
 /** The public file of planning: the working plan, levelling, issuing, dates and load. */
 import type { Transactions } from '../storage/transactions';
+import type { JobPool } from '../jobs/job-pool';
 import { Dates } from './dates';
+import { Forecasts } from './forecast/forecasts';
 import { Issues } from './issues';
 import type { LevelRuns } from './level-runs';
 import { Loads } from './load-view';
@@ -14,7 +16,7 @@ export { mountPlanning } from './planning-routes';
 export { readIssued } from './snapshot-repository';
 
 /** Everything that the routes of planning work with. */
-export function createPlanningParts(transactions: Transactions, levelRuns: LevelRuns): PlanningParts {
+export function createPlanningParts(transactions: Transactions, levelRuns: LevelRuns, pool: JobPool): PlanningParts {
   return {
     workingPlan: new WorkingPlan(transactions),
     revisions: new Revisions(transactions),
@@ -23,5 +25,6 @@ export function createPlanningParts(transactions: Transactions, levelRuns: Level
     issues: new Issues(transactions),
     dates: new Dates(transactions),
     loads: new Loads(transactions),
+    forecasts: new Forecasts(transactions, pool),
   };
 }

@@ -1,6 +1,7 @@
 import { endpoints } from '@common/contract';
 import type { Api } from '../http/api';
 import type { Dates } from './dates';
+import type { Forecasts } from './forecast/forecasts';
 import type { Issues } from './issues';
 import type { LevelRuns } from './level-runs';
 import type { Loads } from './load-view';
@@ -17,11 +18,12 @@ export interface PlanningParts {
   readonly issues: Issues;
   readonly dates: Dates;
   readonly loads: Loads;
+  readonly forecasts: Forecasts;
 }
 
 /** The working plan, levelling and issuing. */
 export function mountPlanning(api: Api, parts: PlanningParts): void {
-  const { workingPlan, revisions, levelRuns, proposals, issues, dates, loads } = parts;
+  const { workingPlan, revisions, levelRuns, proposals, issues, dates, loads, forecasts } = parts;
   api.on(endpoints.readPlan, () => workingPlan.read());
   api.on(endpoints.moveStage, ({ actor, body }) => revisions.move(actor, body));
   api.on(endpoints.releasePin, ({ actor, body }) => revisions.release(actor, body));
@@ -37,5 +39,7 @@ export function mountPlanning(api: Api, parts: PlanningParts): void {
   api.on(endpoints.issue, ({ actor, body }) => issues.issue(actor, body));
   api.on(endpoints.listIssued, () => issues.list());
   api.on(endpoints.readDates, () => dates.read());
+  api.on(endpoints.readForecast, () => forecasts.read());
+  api.on(endpoints.readPastHours, () => forecasts.pastHours());
   api.on(endpoints.readLoad, ({ query }) => loads.read(query.by));
 }

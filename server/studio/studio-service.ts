@@ -30,14 +30,15 @@ export class StudioService {
       const studio = await repository.studio();
       const before = studioView(studio);
       requireVersion(before, change);
-      const { settings, version: _version, ...fields } = change;
+      const { settings, forecast, version: _version, ...fields } = change;
       Object.assign(studio, sentMembers(fields), { version: studio.version + 1 });
       studio.settings = { ...studio.settings, ...(settings && sentMembers(settings)) };
+      studio.forecast = { ...studio.forecast, ...(forecast && sentMembers(forecast)) };
       await repository.saveStudio(studio);
       const after = studioView(studio);
       const what = changedFields(
-        { ...before, ...before.settings },
-        { ...after, ...after.settings, settings: before.settings },
+        { ...before, ...before.settings, ...before.forecast },
+        { ...after, ...after.settings, ...after.forecast, settings: before.settings, forecast: before.forecast },
       );
       const sentence = `Changed the studio: ${what}.`;
       await unit.record({ action: 'changed', subject: { kind: 'studio', id: studio.id }, sentence, before, after });
