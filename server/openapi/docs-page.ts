@@ -19,6 +19,7 @@ export function docsPage(document: OpenApiDocument): string {
 <meta charset="utf-8">
 <meta name="viewport" content="width=device-width, initial-scale=1">
 <title>The API of Fettle</title>
+<link rel="icon" type="image/svg+xml" href="/favicon.svg">
 <link rel="stylesheet" href="/api/docs/style.css">
 </head>
 <body>

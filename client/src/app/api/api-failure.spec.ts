@@ -33,6 +33,11 @@ describe('toApiFailure', () => {
     expect(failure.requestId).toBeNull();
   });
 
+  it('says so too where the page’s own service worker answers for a lost connection', () => {
+    const failure = toApiFailure(new HttpErrorResponse({ status: 504, statusText: 'Gateway Timeout', error: '' }));
+    expect(failure).toMatchObject({ kind: 'unreachable', status: 504 });
+  });
+
   it('keeps the request id of an answer that is no problem details, such as a proxy’s page', () => {
     const headers = new HttpHeaders({ 'X-Request-Id': 'r-2' });
     const failure = toApiFailure(new HttpErrorResponse({ status: 502, error: '<html>', headers }));

@@ -37,6 +37,9 @@ export class ApiFailure extends Error {
   }
 }
 
+/** What stands between the page and the server says these: a proxy, or the page's own service worker without a connection. */
+const NOT_REACHED: ReadonlySet<number> = new Set([502, 503, 504]);
+
 /** Turns whatever a request threw into an `ApiFailure`; one that is an `ApiFailure` already stays as it is. */
 export function toApiFailure(error: unknown): ApiFailure {
   if (error instanceof ApiFailure) {
@@ -47,16 +50,12 @@ export function toApiFailure(error: unknown): ApiFailure {
   }
   const requestId = error.headers.get('X-Request-Id');
   if (error.status === 0) {
-    return new ApiFailure({
-      kind: 'unreachable',
-      status: 0,
-      title: 'Fettle can’t be reached',
-      detail: 'Check the connection, then try again. Nothing you typed is lost.',
-    });
+    return unreachable(0);
   }
   const problem = ProblemDetails.safeParse(fromText(error.error));
   if (!problem.success) {
-    return unreadable(error.status, requestId);
+    const isFromBetween = NOT_REACHED.has(error.status) && requestId === null;
+    return isFromBetween ? unreachable(error.status) : unreadable(error.status, requestId);
   }
   const { type, title, status, detail, errors, current, sent } = problem.data;
   return new ApiFailure({
@@ -68,6 +67,15 @@ export function toApiFailure(error: unknown): ApiFailure {
     faults: errors,
     current,
     sent,
+  });
+}
+
+function unreachable(status: number): ApiFailure {
+  return new ApiFailure({
+    kind: 'unreachable',
+    status,
+    title: 'Fettle can’t be reached',
+    detail: 'Check the connection, then try again. Nothing you typed is lost.',
   });
 }
 
