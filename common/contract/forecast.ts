@@ -38,9 +38,9 @@ export const KeyDateForecastView = Spread.extend({
   missChance: Share,
   fan: Fan,
   /** Stages by the share of draws in which they are on the driving chain, most often first. */
-  drivers: z.array(z.object({ stageId: Id, share: Share })),
+  drivers: z.array(z.object({ stageId: Id, name: z.string(), share: Share })),
   /** Stages by the rank correlation of their own time with the date, strongest first. */
-  correlations: z.array(z.object({ stageId: Id, rank: z.number().min(-1).max(1) })),
+  correlations: z.array(z.object({ stageId: Id, name: z.string(), rank: z.number().min(-1).max(1) })),
   /** The last forecast of an earlier day; null where there is none. */
   earlier: z.object({ day: Day, missChance: Share, p80: MinuteStamp }).nullable(),
 });

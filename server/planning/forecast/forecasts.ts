@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto';
 import { FAN_STEPS, type ForecastView, type PastHoursView } from '@common/contract';
 import { learnOverrun, NO_FACTOR, type LogFactor } from '@common/forecast';
+import type { Names } from '@common/planning';
 import { buildUncertainty } from '@common/planning-input';
 import type { CalendarDay } from '@common/time/span';
 import { dayOfInstant } from '@common/time/calendar-day';
@@ -26,6 +27,7 @@ interface Question {
   readonly overrun: LogFactor;
   readonly pastStages: number;
   readonly earlier: readonly EarlierForecast[];
+  readonly names: Names;
 }
 
 interface Answer {
@@ -106,6 +108,7 @@ function questionOf(
     overrun,
     pastStages: past.length,
     earlier,
+    names: desk.names,
   };
 }
 
@@ -121,7 +124,11 @@ function onlyWhollyPlaced({ problem, plan }: Desk): Desk['problem'] {
 }
 
 function viewOf(question: Question, found: ForecastFound, madeAt: Date): ForecastView {
-  const { revision, overrun, pastStages } = question;
+  const { revision, overrun, pastStages, names } = question;
+  const named = <T extends { readonly stageId: string }>(one: T): T & { readonly name: string } => ({
+    ...one,
+    name: names.stage(one.stageId),
+  });
   const earlier = new Map(question.earlier.map((one) => [one.keyDateId, one]));
   return {
     revision,
@@ -134,8 +141,8 @@ function viewOf(question: Question, found: ForecastFound, madeAt: Date): Forecas
       return {
         ...keyDate,
         fan: [...fan],
-        drivers: [...drivers],
-        correlations: [...correlations],
+        drivers: drivers.map(named),
+        correlations: correlations.map(named),
         earlier: before ? { day: before.day, missChance: before.missChance, p80: before.p80 } : null,
       };
     }),

@@ -1,11 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, signal } from '@angular/core';
 import { RouterLink } from '@angular/router';
-import type { DateRisk, ProductionSummary } from '@common/contract';
+import type { DateRisk, KeyDateForecastView, ProductionSummary } from '@common/contract';
 import { KEY_DATE_NAMES } from '@common/domain/key-date';
 import { MarkChip } from '../ui/mark-chip';
 import { Moment } from '../ui/moment';
 import { minuteOf, sayDayAndTime } from '../ui/say-time';
 import { STUDIO_CLOCK } from '../ui/studio-clock';
+import { DateForecast } from './date-forecast';
 import { marginPlace, sayDateMargin, STATE_WORDS } from './say-date-state';
 
 /** Before the first stage of a chain comes into the window of the plan. */
@@ -17,7 +18,7 @@ const STEPS_SHOWN = 7;
 @Component({
   selector: 'fettle-date-card',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [MarkChip, Moment, RouterLink],
+  imports: [DateForecast, MarkChip, Moment, RouterLink],
   templateUrl: './date-card.html',
   styleUrl: './date-card.scss',
   host: { '[class]': "'state-' + risk().state" },
@@ -27,6 +28,10 @@ export class DateCard {
 
   readonly risk = input.required<DateRisk>();
   readonly productions = input.required<ReadonlyMap<string, ProductionSummary>>();
+
+  /** Null where it is not forecast: not yet, or because a part of it has no place in the plan. */
+  readonly forecast = input<KeyDateForecastView | null>(null);
+  readonly draws = input(0);
 
   protected readonly production = computed(() => this.productions().get(this.risk().productionId));
   protected readonly name = computed(() => KEY_DATE_NAMES[this.risk().kind]);

@@ -18,15 +18,37 @@ import { DateCard } from './date-card';
         emptyTitle="No key dates ahead"
         emptyHint="Give a production its delivery or its technical rehearsal, and it shows here with what leads to it."
       >
+        <p class="small quiet basis" role="status">
+          @switch (forecast.state()) {
+            @case ('loading') {
+              Living the plan through, to see what each date is worth…
+            }
+            @case ('failed') {
+              The chances can’t be told now: {{ forecast.failure()?.detail }}
+              <button class="plain" type="button" (click)="forecast.reload()">Try again</button>
+            }
+            @default {
+              {{ basis() }}
+            }
+          }
+        </p>
         <div class="cards">
           @for (risk of dates.value(); track risk.keyDateId) {
-            <fettle-date-card [risk]="risk" [productions]="byId()" />
+            <fettle-date-card
+              [risk]="risk"
+              [productions]="byId()"
+              [forecast]="forecasts().get(risk.keyDateId) ?? null"
+              [draws]="forecast.value()?.draws ?? 0"
+            />
           }
         </div>
       </fettle-state-panel>
     </div>
   `,
   styles: `
+    .basis {
+      margin-bottom: var(--space-3);
+    }
     .cards {
       display: grid;
       gap: var(--space-4);
@@ -37,6 +59,23 @@ import { DateCard } from './date-card';
 })
 export class DatesPage {
   protected readonly dates = readEndpoint(endpoints.readDates);
+  protected readonly forecast = readEndpoint(endpoints.readForecast);
+  protected readonly forecasts = computed(
+    () => new Map(this.forecast.value()?.keyDates.map((one) => [one.keyDateId, one])),
+  );
+  /** Where the chances come from, and whether the plan has moved on since. */
+  protected readonly basis = computed(() => {
+    const forecast = this.forecast.value();
+    if (!forecast) return '';
+    const { draws, overrun } = forecast;
+    const from =
+      overrun.pastStages === 0
+        ? 'no finished work to learn from yet'
+        : `${overrun.pastStages} finished stages that say the studio takes ${(overrun.middlePermille / 10).toFixed(0)} % of its estimates`;
+    const stale =
+      this.forecast.state() === 'stale' ? ' The plan has changed since; it is being lived through again.' : '';
+    return `Chances are from ${draws.toLocaleString('en')} draws of the working plan, with ${from}.${stale}`;
+  });
   private readonly productions = readEndpoint(endpoints.listProductions);
   protected readonly byId = computed(() => new Map(this.productions.value()?.map((one) => [one.id, one])));
   protected readonly lead = computed(() => {
@@ -55,9 +94,13 @@ export class DatesPage {
 
   constructor() {
     onLiveEvent((event) => {
-      if (event === null || event.kind === 'plan-revised') this.dates.reload();
+      if (event === null || event.kind === 'plan-revised') {
+        this.dates.reload();
+        this.forecast.reload();
+      }
       if (event === null || event.kind === 'record-changed') {
         this.dates.reload();
+        this.forecast.reload();
         this.productions.reload();
       }
     });

@@ -1,0 +1,14 @@
+/** "under 1 in 1,000", "4.2 %", "63 %", "over 999 in 1,000": a chance as far as so many draws can tell it. */
+export function sayChance(share: number, draws: number): string {
+  if (share <= 0) return `under 1 in ${draws.toLocaleString('en')}`;
+  if (share >= 1) return `over ${(draws - 1).toLocaleString('en')} in ${draws.toLocaleString('en')}`;
+  const percent = share * 100;
+  return `${percent < 9.95 || percent > 90.05 ? percent.toFixed(1) : percent.toFixed(0)} %`;
+}
+
+/** "up from 12 % on Mon 30 Nov", "as on Mon 30 Nov": how a chance has moved; whole per cents, for draws tell no finer over days. */
+export function sayChanceMoved(now: number, before: number, day: string): string {
+  const [here, there] = [Math.round(now * 100), Math.round(before * 100)];
+  if (here === there) return `as on ${day}`;
+  return `${here > there ? 'up' : 'down'} from ${there} % on ${day}`;
+}
