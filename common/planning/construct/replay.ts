@@ -26,9 +26,9 @@ export const NO_DRIVER = -1;
 const UNKNOWN = -2;
 
 /**
- * A plan made ready to be lived through again and again with other times: the same order, crews and bays by the same generation
- * scheme, while efforts, dwells, earliest starts and absences are what the caller last wrote. Stages are indexed in the order of
- * `stageIds`. A pin, a visit or the freeze is a wish when what comes before is late, so there it is a start not to come before.
+ * A plan made ready to be lived through again and again with other times: the same order and bays by the same generation scheme,
+ * while efforts, dwells, earliest starts and absences are what the caller last wrote. Who does a stage is settled anew among those
+ * who may: a studio whose laminator is ill or held up asks the other one. Stages are indexed in the order of `stageIds`. A pin, a visit or the freeze is a wish when what comes before is late, so there it is a start not to come before.
  */
 export class Replay {
   readonly stageIds: readonly string[];
@@ -167,7 +167,7 @@ export class Replay {
     return last >= 0 && layout.isPlaced[last] === 1 ? layout.end[last] : layout.end[stage];
   }
 
-  /** The compiled problem with the plan's crews and bays as the only choice, nothing tied but what has happened. */
+  /** The compiled problem with the plan's bays as the only choice, nothing tied but what has happened. */
   private withPlanned(base: Compiled, planned: Layout): Compiled {
     const { work } = base;
     return {
@@ -179,7 +179,6 @@ export class Replay {
         dwellAge: this.dwellAge,
         earliest: this.earliest,
         fixity: work.fixity.map((fixity) => (fixity === FIXED_START || fixity === FROZEN ? MOVABLE : fixity)),
-        crews: work.crews.map((crews, stage) => (planned.crew[stage] ? [planned.crew[stage]] : crews)),
         housings: work.housings.map((housings, stage) =>
           planned.housing[stage] ? [planned.housing[stage]] : housings,
         ),

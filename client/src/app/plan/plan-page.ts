@@ -22,6 +22,7 @@ import { Notice } from '../ui/notice';
 import { StatePanel } from '../ui/state-panel';
 import { Toasts } from '../ui/toasts';
 import { DayReading } from './day-reading/day-reading';
+import { ForecastStore } from './forecast-store';
 import { InsightStore } from './insight-store';
 import { Inspector } from './inspector/inspector';
 import { IssueDialog } from './issue/issue-dialog';
@@ -60,7 +61,7 @@ const SMALL_SCREEN = '(max-width: 46rem)';
     Timeline,
     UnmetPanel,
   ],
-  providers: [PlanningLine, PlanStore, BoardStore, HoldStore, InsightStore, LevelStore, PlanAddress],
+  providers: [PlanningLine, PlanStore, BoardStore, HoldStore, InsightStore, ForecastStore, LevelStore, PlanAddress],
   templateUrl: './plan-page.html',
   styleUrl: './plan-page.scss',
   host: { '(document:keydown)': 'keydown($event)', '[class.small]': 'small()' },

@@ -2,6 +2,7 @@ import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { PageHeading } from '../ui/page-heading';
 import { AccountsBoard } from './accounts-board';
 import { ClosuresBoard } from './closures-board';
+import { ForecastBoard } from './forecast-board';
 import { FeedsBoard } from './feeds-board';
 import { StudioBoard } from './studio-board';
 
@@ -9,12 +10,15 @@ import { StudioBoard } from './studio-board';
 @Component({
   selector: 'fettle-settings-page',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [AccountsBoard, ClosuresBoard, FeedsBoard, PageHeading, StudioBoard],
+  imports: [AccountsBoard, ClosuresBoard, FeedsBoard, ForecastBoard, PageHeading, StudioBoard],
   template: `
     <div class="page">
       <fettle-page-heading title="Settings" lead="What holds for the whole studio." />
       <div class="columns">
-        <fettle-studio-board />
+        <div class="stack">
+          <fettle-studio-board />
+          <fettle-forecast-board />
+        </div>
         <div class="stack">
           <fettle-closures-board />
           <fettle-accounts-board />

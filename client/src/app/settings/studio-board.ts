@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, effect, inject, signal, untracked }
 import { FormControl, FormGroup, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { endpoints, Name, type StudioView, ZoneName } from '@common/contract';
-import { Api, readEndpoint } from '../api';
+import { Api, onLiveEvent, readEndpoint } from '../api';
 import { SessionStore } from '../session';
 import { VersionedWrites } from '../ui/conflict-dialog';
 import { keeps } from '../ui/field-errors';
@@ -67,6 +67,10 @@ export class StudioBoard {
   });
 
   constructor() {
+    onLiveEvent((event) => {
+      // The other board on this page, or somebody else.
+      if (event?.kind === 'record-changed' && event.subject === 'studio') this.studio.reload();
+    });
     if (!this.isOwner) {
       this.form.disable();
     }

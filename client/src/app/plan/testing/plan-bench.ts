@@ -1,10 +1,11 @@
 import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
-import { type EnvironmentProviders, type Provider } from '@angular/core';
+import { type EnvironmentProviders, type Provider, signal } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
 import type { WorkingPlanView } from '@common/contract';
 import type { Move, Placement } from '@common/planning';
+import { ForecastStore } from '../forecast-store';
 import { InsightStore } from '../insight-store';
 import { SPAWN_PLANNING_WORKER, PlanningLine } from '../planning-worker/planning-line';
 import { type Answer, type AnswerBody, PROTOCOL, type Question } from '../planning-worker/protocol';
@@ -97,6 +98,8 @@ export async function openBench(
       PlanStore,
       BoardStore,
       HoldStore,
+      // What the wall shows besides is no matter of these tests, and a request that nobody answers would keep it from being still.
+      { provide: ForecastStore, useValue: { fans: signal(new Map()), fresh: signal(true) } },
       InsightStore,
       ...providers,
     ],

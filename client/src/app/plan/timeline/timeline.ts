@@ -22,6 +22,7 @@ import { sayRefusal } from '../wording/say-refusal';
 import { sayStage } from '../wording/say-stage';
 import { awayBands, type Band } from './away-bands';
 import { BoardStore, HEAD } from './board-store';
+import { DateFan } from './date-fan';
 import { type LaidRow, type LaidTape, TAPE_HEIGHT } from './engine/board-layout';
 import { rowAt, rowsIn, tapesIn, tapesOf } from './engine/board-window';
 import { edgeSpeed } from './engine/edge-scroll';
@@ -44,7 +45,7 @@ export const HEAD_WIDTH = 188;
 @Component({
   selector: 'fettle-timeline',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [HoldByPointer, MarkChip, RuleHead, TapeMark],
+  imports: [DateFan, HoldByPointer, MarkChip, RuleHead, TapeMark],
   templateUrl: './timeline.html',
   styleUrl: './timeline.scss',
   host: { '(document:keydown.escape)': 'escape()', '[style.--head-width.px]': 'headWidth' },
