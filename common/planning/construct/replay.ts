@@ -5,6 +5,7 @@ import type { Calendar } from './calendar';
 import { compile } from './compile';
 import {
   type Compiled,
+  type Crew,
   FINISH_START,
   FIXED_START,
   FROZEN,
@@ -167,7 +168,7 @@ export class Replay {
     return last >= 0 && layout.isPlaced[last] === 1 ? layout.end[last] : layout.end[stage];
   }
 
-  /** The compiled problem with the plan's bays as the only choice, nothing tied but what has happened. */
+  /** The compiled problem with the plan's bays as the only choice and few crews, nothing tied but what has happened. */
   private withPlanned(base: Compiled, planned: Layout): Compiled {
     const { work } = base;
     return {
@@ -179,12 +180,25 @@ export class Replay {
         dwellAge: this.dwellAge,
         earliest: this.earliest,
         fixity: work.fixity.map((fixity) => (fixity === FIXED_START || fixity === FROZEN ? MOVABLE : fixity)),
+        crews: work.crews.map((crews, stage) => withStandIns(planned.crew[stage], crews)),
         housings: work.housings.map((housings, stage) =>
           planned.housing[stage] ? [planned.housing[stage]] : housings,
         ),
       },
     };
   }
+}
+
+/** Crews that are asked when the planned one is held up; more than a few change little and cost time. */
+const MOST_STAND_INS = 3;
+
+/** The planned crew first, so that it keeps its work where nobody would be sooner, then others of as many hands. */
+function withStandIns(planned: Crew | null, crews: readonly Crew[]): readonly Crew[] {
+  if (!planned) return crews;
+  const others = crews.filter(
+    ({ index, makers }) => index !== planned.index && makers.length === planned.makers.length,
+  );
+  return [planned, ...others.slice(0, MOST_STAND_INS)];
 }
 
 interface Release {
