@@ -1,27 +1,38 @@
 import type { Span } from '../time/span';
 import { Chance, type Problem, type Replay } from '../planning';
 import { normalQuantile } from './normal';
-import { pertQuantile } from './pert-quantile';
+import { pertQuantiles } from './pert-quantile';
 import { mixName, shareOfRank, stratifiedRanks } from './stratified';
+import type { ThreePoint } from './three-point';
 import type { StageUncertainty, Uncertainty } from './uncertainty';
 
-/** The drawn quantities of one stage: the stratum of each draw. */
-interface StageRanks {
+/** One quantity of a stage over all draws. */
+interface Drawn {
+  /** The stratum of each draw; all 0 where it is certain. */
+  readonly ranks: Int32Array;
+  /** Its value in each draw, in minutes. */
+  readonly minutes: Float64Array;
+  readonly likely: number;
+}
+
+/** What is drawn of one stage; null for what it has not, or no longer ahead of it. */
+interface StageDraws {
   readonly index: number;
-  readonly known: StageUncertainty;
   readonly plannedEffort: number;
   readonly plannedAge: number;
   readonly plannedEarliest: number;
-  readonly effort: Int32Array;
-  readonly dwell: Int32Array;
-  readonly delay: Int32Array;
+  readonly effort: Drawn | null;
+  readonly dwell: Drawn | null;
+  readonly delay: Drawn | null;
 }
 
 /** Writes the times of one draw after another into a replay. */
 export class TimeDrawer {
-  private readonly stages: readonly StageRanks[];
+  private readonly stages: readonly StageDraws[];
+  private readonly byIndex: ReadonlyMap<number, StageDraws>;
   private readonly overrun: Int32Array;
   private readonly curing: Int32Array;
+  private readonly certain: Int32Array;
 
   constructor(
     private readonly problem: Problem,
@@ -34,30 +45,21 @@ export class TimeDrawer {
     const finished = new Set(
       problem.stages.filter((stage) => stage.progress.kind === 'finished').map((stage) => stage.id),
     );
+    this.certain = new Int32Array(draws);
     this.stages = uncertainty.stages.flatMap((known) => {
       const index = indexOf.get(known.stageId);
-      if (index === undefined) return [];
-      const ranks = (what: string): Int32Array => stratifiedRanks(seed, `${what} ${known.stageId}`, draws);
-      return [
-        {
-          index,
-          known,
-          plannedEffort: finished.has(known.stageId) ? 0 : replay.effortMinutes[index],
-          plannedAge: replay.dwellAge[index],
-          plannedEarliest: replay.earliest[index],
-          effort: ranks('effort'),
-          dwell: ranks('dwell'),
-          delay: ranks('delay'),
-        },
-      ];
+      return index === undefined ? [] : [this.drawStage(known, index, finished.has(known.stageId))];
     });
+    this.byIndex = new Map(this.stages.map((stage) => [stage.index, stage]));
     this.overrun = stratifiedRanks(seed, 'overrun', draws);
     this.curing = stratifiedRanks(seed, 'curing', draws);
   }
 
   /** The strata of a stage's effort and dwell, for rank correlations; null where nothing is drawn for it. */
   ranksOf(stage: number): { readonly effort: Int32Array; readonly dwell: Int32Array } | null {
-    return this.stages.find((one) => one.index === stage) ?? null;
+    const drawn = this.byIndex.get(stage);
+    if (!drawn) return null;
+    return { effort: drawn.effort?.ranks ?? this.certain, dwell: drawn.dwell?.ranks ?? this.certain };
   }
 
   /** Writes draw number `draw`, from 0. */
@@ -68,22 +70,46 @@ export class TimeDrawer {
     this.writeAbsences(draw);
   }
 
-  private writeStage(stage: StageRanks, draw: number, overrun: number, curing: number): void {
-    const { known, index } = stage;
-    const { effortMinutes, dwellMinutes, delayMinutes } = known;
-    if (stage.plannedEffort > 0 && effortMinutes.likely > 0) {
-      const drawn = pertQuantile(effortMinutes, shareOfRank(stage.effort[draw], this.draws)) * overrun;
+  private drawStage(known: StageUncertainty, index: number, isFinished: boolean): StageDraws {
+    const { replay } = this;
+    const { stageId, effortMinutes, dwellMinutes, delayMinutes } = known;
+    const plannedEffort = isFinished ? 0 : replay.effortMinutes[index];
+    const plannedAge = replay.dwellAge[index];
+    const hasEffort = plannedEffort > 0 && effortMinutes.likely > 0;
+    const hasDwell = plannedAge > 0 && dwellMinutes !== null && dwellMinutes.likely > 0;
+    return {
+      index,
+      plannedEffort,
+      plannedAge,
+      plannedEarliest: replay.earliest[index],
+      effort: hasEffort ? this.drawQuantity(`effort ${stageId}`, effortMinutes) : null,
+      dwell: hasDwell ? this.drawQuantity(`dwell ${stageId}`, dwellMinutes) : null,
+      delay: delayMinutes.high > 0 ? this.drawQuantity(`delay ${stageId}`, delayMinutes) : null,
+    };
+  }
+
+  private drawQuantity(name: string, estimate: ThreePoint): Drawn {
+    const { draws } = this;
+    const minutes = new Float64Array(draws).fill(estimate.likely);
+    const { likely } = estimate;
+    if (estimate.high <= estimate.low) return { ranks: this.certain, minutes, likely };
+    const ranks = stratifiedRanks(this.seed, name, draws);
+    const quantile = pertQuantiles(estimate);
+    for (let draw = 0; draw < draws; draw += 1) minutes[draw] = quantile(shareOfRank(ranks[draw], draws));
+    return { ranks, minutes, likely };
+  }
+
+  private writeStage(stage: StageDraws, draw: number, overrun: number, curing: number): void {
+    const { index, effort, dwell, delay } = stage;
+    if (effort) {
       // A stage begun has only a part left: the same share of what was drawn as of what was planned.
-      this.replay.effortMinutes[index] = Math.max(1, Math.round((drawn * stage.plannedEffort) / effortMinutes.likely));
+      const left = (effort.minutes[draw] * overrun * stage.plannedEffort) / effort.likely;
+      this.replay.effortMinutes[index] = Math.max(1, Math.round(left));
     }
-    if (stage.plannedAge > 0 && dwellMinutes && dwellMinutes.likely > 0) {
-      const drawn = pertQuantile(dwellMinutes, shareOfRank(stage.dwell[draw], this.draws)) * curing;
-      this.replay.dwellAge[index] = Math.round((stage.plannedAge * drawn) / dwellMinutes.likely);
+    if (dwell) {
+      this.replay.dwellAge[index] = Math.round((stage.plannedAge * dwell.minutes[draw] * curing) / dwell.likely);
     }
-    if (delayMinutes.high > 0) {
-      const delay = pertQuantile(delayMinutes, shareOfRank(stage.delay[draw], this.draws));
-      this.replay.earliest[index] = stage.plannedEarliest + Math.round(delay);
-    }
+    if (delay) this.replay.earliest[index] = stage.plannedEarliest + Math.round(delay.minutes[draw]);
   }
 
   private factor({ meanLog, sdLog }: Uncertainty['overrun'], rank: number): number {

@@ -118,29 +118,32 @@ class Tally {
 
   sum(made: number, seed: number, drawer: TimeDrawer): Forecast {
     const { start } = this.problem.horizon;
+    // Sorted as they are counted, from the horizon's start: an array of numbers of one kind sorts many times faster.
+    const sorted = (finish: Int32Array): Int32Array => finish.slice(0, made).sort();
     const instants = (finish: Int32Array): Minute[] => Array.from(finish.subarray(0, made), (at) => at + start);
-    const sorted = (finish: Int32Array): Minute[] => instants(finish).sort((a, b) => a - b);
     return {
       draws: made,
       seed,
       keyDates: this.problem.keyDates.map((date, k) => {
         const all = sorted(this.dates[k].finish);
-        const late = all.reduce((count, finish) => (finish > date.at ? count + 1 : count), 0);
+        const late = all.reduce((count, finish) => (start + finish > date.at ? count + 1 : count), 0);
         const counted = this.dates[k];
         return {
           keyDateId: date.id,
-          ...spreadOf(all),
+          ...spreadOf(all, start),
           missChance: late / made,
           drivers: this.namedDrivers(counted.onChain, made),
           correlations: this.namedCorrelations(counted.finish.subarray(0, made), drawer, made),
         };
       }),
-      productions: this.productions.map(({ id, finish }) => ({
-        productionId: id,
-        ...spreadOf(sorted(finish)),
-        sorted: sorted(finish),
+      productions: this.productions.map(({ id, finish }) => {
+        const all = sorted(finish);
+        return { productionId: id, ...spreadOf(all, start), sorted: instants(all) };
+      }),
+      stages: this.replay.stageIds.map((stageId, stage) => ({
+        stageId,
+        ...spreadOf(sorted(this.finishes[stage]), start),
       })),
-      stages: this.replay.stageIds.map((stageId, stage) => ({ stageId, ...spreadOf(sorted(this.finishes[stage])) })),
       finishesByKeyDate: this.dates.map(({ finish }) => instants(finish)),
     };
   }
@@ -180,11 +183,11 @@ class Tally {
   }
 }
 
-function spreadOf(sorted: readonly Minute[]): FinishSpread {
+function spreadOf(sorted: Int32Array, start: Minute): FinishSpread {
   return {
-    p10: quantileOf(sorted, 0.1),
-    p50: quantileOf(sorted, 0.5),
-    p80: quantileOf(sorted, 0.8),
-    p90: quantileOf(sorted, 0.9),
+    p10: start + quantileOf(sorted, 0.1),
+    p50: start + quantileOf(sorted, 0.5),
+    p80: start + quantileOf(sorted, 0.8),
+    p90: start + quantileOf(sorted, 0.9),
   };
 }

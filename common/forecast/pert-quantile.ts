@@ -13,12 +13,19 @@ const tables = new Map<number, Float64Array>();
  * once for each lean of likeliest between least and greatest, so that a thousand draws of two hundred stages cost no integrals.
  */
 export function pertQuantile(estimate: ThreePoint, share: number): number {
-  const width = estimate.high - estimate.low;
-  if (width <= 0) return estimate.likely;
+  return pertQuantiles(estimate)(share);
+}
+
+/** The same for many shares of one estimate. */
+export function pertQuantiles(estimate: ThreePoint): (share: number) => number {
+  const { low, likely, high } = estimate;
+  if (high <= low) return () => likely;
   const table = tableOf(estimate);
-  const at = Math.min(CELLS - 1e-9, Math.max(0, share * CELLS));
-  const cell = Math.floor(at);
-  return estimate.low + width * (table[cell] + (at - cell) * (table[cell + 1] - table[cell]));
+  return (share) => {
+    const at = Math.min(CELLS - 1e-9, Math.max(0, share * CELLS));
+    const cell = Math.floor(at);
+    return low + (high - low) * (table[cell] + (at - cell) * (table[cell + 1] - table[cell]));
+  };
 }
 
 function tableOf(estimate: ThreePoint): Float64Array {

@@ -7,7 +7,8 @@ import { Chance } from '../planning';
  */
 export function stratifiedRanks(seed: number, name: string, draws: number): Int32Array {
   const chance = new Chance(mixName(seed, name));
-  const ranks = Int32Array.from({ length: draws }, (_, k) => k);
+  const ranks = new Int32Array(draws);
+  for (let k = 0; k < draws; k += 1) ranks[k] = k;
   for (let k = draws - 1; k > 0; k -= 1) {
     const other = chance.below(k + 1);
     const kept = ranks[k];

@@ -61,9 +61,7 @@ export class StageBounds {
     this.highEndCause = NOBODY;
     this.highFinishCause = NOBODY;
     this.highEndRetry = 0;
-    this.softUntil.length = 0;
-    this.softExtra.length = 0;
-    this.softCause.length = 0;
+    if (this.softUntil.length > 0) this.forgetWindows();
     this.gatherBefore(stage);
     this.gatherAfter(stage);
     this.gatherHolds(stage);
@@ -96,6 +94,12 @@ export class StageBounds {
     }
     [this.highStart, this.highEnd, this.highFinish] = highs;
     return Math.max(1, broken);
+  }
+
+  private forgetWindows(): void {
+    this.softUntil.length = 0;
+    this.softExtra.length = 0;
+    this.softCause.length = 0;
   }
 
   private gatherBefore(stage: number): void {

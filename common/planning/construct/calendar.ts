@@ -38,26 +38,46 @@ export class Calendar {
     const starts = new Int32Array(this.count + away.length);
     const ends = new Int32Array(this.count + away.length);
     let count = 0;
+    // The first stretch not looked at yet, and from when on it is left.
     let next = 0;
-    for (let i = 0; i < this.count; i += 1) {
-      let from = this.starts[i];
-      const until = this.ends[i];
-      while (next < away.length && away[next].end - origin <= from) next += 1;
-      for (let k = next; k < away.length && away[k].start - origin < until; k += 1) {
-        const gap = away[k].start - origin;
-        if (gap > from) {
-          starts[count] = from;
-          ends[count] = gap;
-          count += 1;
-        }
-        from = Math.max(from, away[k].end - origin);
+    let left = 0;
+    for (const span of away) {
+      const from = span.start - origin;
+      const cut = this.indexAt(from);
+      count = this.copyTo(starts, ends, count, next, cut, left);
+      next = Math.max(next, cut);
+      const start = next < this.count ? Math.max(this.starts[next], left) : from;
+      if (start < from) {
+        starts[count] = start;
+        ends[count] = from;
+        count += 1;
       }
-      if (from >= until) continue;
-      starts[count] = from;
-      ends[count] = until;
-      count += 1;
+      left = span.end - origin;
+      next = Math.max(next, this.indexAt(left));
     }
+    count = this.copyTo(starts, ends, count, next, this.count, left);
     return new Calendar(starts, ends, count, horizonMinutes);
+  }
+
+  /** Copies stretches `from..until`, the first of them from `left` on, to where `count` stand already; how many stand then. */
+  private copyTo(
+    starts: Int32Array,
+    ends: Int32Array,
+    count: number,
+    from: number,
+    until: number,
+    left: number,
+  ): number {
+    if (from >= until) return count;
+    const [ownStarts, ownEnds] = [this.starts, this.ends];
+    let at = count;
+    for (let i = from; i < until; i += 1) {
+      starts[at] = ownStarts[i];
+      ends[at] = ownEnds[i];
+      at += 1;
+    }
+    starts[count] = Math.max(ownStarts[from], left);
+    return at;
   }
 
   /** The first stretch that ends after an instant; `count` where none does. */

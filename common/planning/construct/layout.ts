@@ -99,7 +99,7 @@ export class Layout {
     this.housing.fill(null);
     for (const booking of this.bookings) booking.clear();
     for (const bay of this.bays) bay.clear();
-    for (const holds of this.openHolds) holds.length = 0;
+    for (const holds of this.openHolds) if (holds.length > 0) holds.length = 0;
     this.version += 1;
     this.poolUsed = 0;
     this.spanRoom.fill(0);

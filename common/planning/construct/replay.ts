@@ -48,6 +48,8 @@ export class Replay {
   private readonly extended: Calendar[];
   private readonly wholeOrdinary: readonly Calendar[];
   private readonly wholeExtended: readonly Calendar[];
+  /** Makers whose overtime is ever asked for. */
+  private readonly worksLonger: ReadonlySet<number>;
   private readonly usersOfBay: readonly (readonly number[])[];
   private readonly drivers: Int32Array;
 
@@ -65,6 +67,7 @@ export class Replay {
     this.compiled = this.withPlanned(base, planned);
     this.generator = new Generator(this.compiled);
     this.genome = genomeOfPlan(this.compiled, planned);
+    this.worksLonger = askedForOvertime(this.compiled, this.genome);
     this.drivers = new Int32Array(base.stageCount).fill(UNKNOWN);
     this.stageIds = base.stages.map((stage) => stage.id);
     this.makerIds = base.makerIds;
@@ -95,7 +98,8 @@ export class Replay {
     const { origin, horizonMinutes } = this.compiled;
     const [ordinary, extended] = [this.wholeOrdinary[maker], this.wholeExtended[maker]];
     this.ordinary[maker] = ordinary.less(away, origin, horizonMinutes);
-    this.extended[maker] = extended === ordinary ? this.ordinary[maker] : extended.less(away, origin, horizonMinutes);
+    if (extended === ordinary) this.extended[maker] = this.ordinary[maker];
+    else if (this.worksLonger.has(maker)) this.extended[maker] = extended.less(away, origin, horizonMinutes);
   }
 
   /**
@@ -230,6 +234,15 @@ function genomeOfPlan(compiled: Compiled, planned: Layout): Genome {
     crewChoice: new Int16Array(compiled.stageCount).fill(-1),
     overtime: Uint8Array.from(compiled.stages, (_, stage) => (worksOvertime(compiled, planned, stage) ? 1 : 0)),
   };
+}
+
+/** The makers of stages that the plan works overtime for, and of those that have begun, for which overtime is tried. */
+function askedForOvertime({ work, stages }: Compiled, { overtime }: Genome): ReadonlySet<number> {
+  const asked = stages
+    .map((_, stage) => stage)
+    .filter((stage) => overtime[stage] === 1 || work.fixity[stage] !== MOVABLE)
+    .flatMap((stage) => work.crews[stage].flatMap((crew) => [...crew.makers]));
+  return new Set(asked);
 }
 
 function worksOvertime({ makers }: Compiled, planned: Layout, stage: number): boolean {
