@@ -6,7 +6,7 @@ import type { Readiness } from './http/health-routes';
 import type { Log } from './http/log';
 import type { LiveHub } from './live';
 import type { JobPool } from './jobs/job-pool';
-import type { LevelRuns } from './planning';
+import type { LevelRuns, SearchRuns } from './planning';
 import type { Authenticator, SessionKeeping } from './session';
 import type { Transactions } from './storage/transactions';
 
@@ -20,6 +20,7 @@ export interface AppParts {
   readonly live: LiveHub;
   readonly jobPool: JobPool;
   readonly levelRuns: LevelRuns;
+  readonly searchRuns: SearchRuns;
   readonly readiness: Readiness;
 }
 

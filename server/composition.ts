@@ -6,7 +6,7 @@ import type { Config } from './config';
 import { createLog, type Log } from './http/log';
 import { LiveHub } from './live';
 import { JobPool } from './jobs/job-pool';
-import { LevelRuns } from './planning';
+import { LevelRuns, SearchRuns } from './planning';
 import { keepSessions } from './session';
 import { ProcessMark } from './storage/process-mark';
 import { Transactions } from './storage/transactions';
@@ -45,6 +45,7 @@ export async function compose(
   const transactions = new Transactions(dataSource, log, clock);
   const jobPool = new JobPool(config.engineWorkers ?? undefined);
   const levelRuns = new LevelRuns(transactions, jobPool, live, log);
+  const searchRuns = new SearchRuns(transactions, jobPool, live, log);
   await levelRuns.failLeftBehind();
   let isReady = true;
   const app = createApp({
@@ -56,6 +57,7 @@ export async function compose(
     live,
     jobPool,
     levelRuns,
+    searchRuns,
     readiness: { isReady: () => isReady },
   });
   return {
@@ -67,6 +69,7 @@ export async function compose(
     endLivePages: () => live.endStreams(),
     stop: async () => {
       await levelRuns.stop();
+      await searchRuns.settled();
       await live.stop();
       await sessions.close();
       await sessionPool.end();

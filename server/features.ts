@@ -25,7 +25,7 @@ export function mountFeatures(parts: FeatureParts): void {
   });
   mountBays(api, new Bays(transactions));
   mountLibrary(api, { materials: new Materials(transactions), recipes: new Recipes(transactions) });
-  mountPlanning(api, createPlanningParts(transactions, parts.levelRuns, parts.jobPool));
+  mountPlanning(api, createPlanningParts(parts));
   mountProductions(api, createProductionParts(transactions));
   mountClientPage(api, new ClientPage(transactions));
   mountDaySheets(api, new DaySheets(transactions));

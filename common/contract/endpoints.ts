@@ -8,7 +8,9 @@ import { libraryEndpoints } from './library';
 import { pieceEndpoints } from './pieces';
 import { planningEndpoints } from './planning';
 import { productionEndpoints } from './productions';
+import { promiseEndpoints } from './promises';
 import { purchaseEndpoints } from './purchases';
+import { rescueEndpoints } from './rescues';
 import { sessionEndpoints } from './session';
 import { stageImportEndpoints } from './stage-import';
 import { studioEndpoints } from './studio';
@@ -27,6 +29,8 @@ export const endpoints = {
   ...clientPageEndpoints,
   ...planningEndpoints,
   ...forecastEndpoints,
+  ...rescueEndpoints,
+  ...promiseEndpoints,
   ...daySheetEndpoints,
   ...feedEndpoints,
 };

@@ -16,6 +16,8 @@ export * from './client-page';
 export * from './engine-wire';
 export * from './planning';
 export * from './forecast';
+export * from './rescues';
+export * from './promises';
 export * from './day-sheet';
 export * from './feeds';
 export * from './live';

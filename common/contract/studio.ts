@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { endpoint, OFFICE, OWNER, WORKSHOP, ById } from './endpoint';
 import { ForecastSettings } from './forecast';
+import { RescueSettings } from './rescues';
 import { DayRange, Id, Instant, Minutes, Name, StoredDayRange, Version, ZoneName } from './primitives';
 
 /** Weights and limits of the studio; see docs/planning.md for what each does. */
@@ -27,11 +28,18 @@ export const StudioView = z.object({
   currency: z.string(),
   settings: StudioSettings,
   forecast: ForecastSettings,
+  rescue: RescueSettings,
   version: Version,
 });
 export type StudioView = z.infer<typeof StudioView>;
 export const StudioChange = z
-  .object({ name: Name, zone: ZoneName, settings: StudioSettings.partial(), forecast: ForecastSettings.partial() })
+  .object({
+    name: Name,
+    zone: ZoneName,
+    settings: StudioSettings.partial(),
+    forecast: ForecastSettings.partial(),
+    rescue: RescueSettings.partial(),
+  })
   .partial()
   .extend({ version: Version });
 

@@ -74,12 +74,19 @@ const snapshot = (given: Partial<StudioSnapshot> = {}): StudioSnapshot => ({
   room: constantClimate({ celsius: 10, humidityPercent: 50 }),
   makers: [maker('ada')],
   bays: [
-    { id: 'table', capacity: 2, openings: [], climate: null },
-    { id: 'oven', capacity: 1, openings: [], climate: constantClimate({ celsius: 30, humidityPercent: 50 }) },
+    { id: 'table', isMould: false, capacity: 2, openings: [], climate: null },
+    {
+      id: 'oven',
+      isMould: false,
+      capacity: 1,
+      openings: [],
+      climate: constantClimate({ celsius: 30, humidityPercent: 50 }),
+    },
   ],
   materials: [
     {
       id: 'resin',
+      family: 'resin',
       milestones: [
         {
           milestone: 'demould',
@@ -144,8 +151,8 @@ describe('time', () => {
 
   it('closes a bay outside its openings and in closures, and leaves one without them open', () => {
     const bays = [
-      { id: 'booth', capacity: 1, openings: [{ ...weekdays, lengthMinutes: 60 }], climate: null },
-      { id: 'table', capacity: 1, openings: [], climate: null },
+      { id: 'booth', isMould: false, capacity: 1, openings: [{ ...weekdays, lengthMinutes: 60 }], climate: null },
+      { id: 'table', isMould: false, capacity: 1, openings: [], climate: null },
     ];
     const problem = build({ bays, closures: [{ from: '2026-12-01', until: '2026-12-02' }] });
     expect(problem.bays[0].open?.at(0)).toEqual({ start: at('2026-12-02T08:00'), end: at('2026-12-02T09:00') });

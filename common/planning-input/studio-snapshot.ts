@@ -65,6 +65,7 @@ export interface MakerPattern extends Pattern {
 /** A bay, or a mould where it belongs to a piece. */
 export interface SnapshotBay {
   readonly id: string;
+  readonly isMould: boolean;
   readonly capacity: number;
   /** When work may be done in it; empty for always. Closures close it too. */
   readonly openings: readonly Pattern[];
@@ -72,9 +73,10 @@ export interface SnapshotBay {
   readonly climate: ClimateHistory | null;
 }
 
-/** A material of the library: how each of its milestones advances. */
+/** A material of the library: how each of its milestones advances. Materials of a family can stand in for each other. */
 export interface SnapshotMaterial {
   readonly id: string;
+  readonly family: string;
   readonly milestones: readonly SnapshotMilestone[];
 }
 

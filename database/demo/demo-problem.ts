@@ -27,7 +27,7 @@ export function demoSnapshot(demo: DemoStudio): StudioSnapshot {
     closures: demo.closures.map((closure) => closure.days),
     room: constantClimate({ celsius: roomTemperatureCelsius, humidityPercent: roomHumidityPercent }),
     makers: demo.makers.map((maker) => ({ ...maker, leave: maker.leave.map((leave) => leave.days) })),
-    bays: demo.bays.map((bay) => ({ ...bay, climate: climateOf(bay, demo) })),
+    bays: demo.bays.map((bay) => ({ ...bay, isMould: bay.pieceId !== null, climate: climateOf(bay, demo) })),
     materials: demo.materials.map(materialOf),
     productions: demo.productions,
     pieces: demo.pieces,
@@ -49,9 +49,10 @@ function climateOf(bay: DemoBay, { settings }: DemoStudio): StudioSnapshot['bays
 }
 
 function materialOf(material: DemoMaterial): StudioSnapshot['materials'][number] {
-  const { id, referenceCelsius, referenceHumidityPercent, dwells } = material;
+  const { id, family, referenceCelsius, referenceHumidityPercent, dwells } = material;
   return {
     id,
+    family,
     milestones: dwells.map(({ milestone, minutes, law, minimumCelsius, maximumCelsius }) => ({
       milestone,
       behaviour: { law, referenceCelsius, referenceHumidityPercent, minimumCelsius, maximumCelsius },

@@ -23,6 +23,7 @@ import { MakerPattern } from './maker-pattern';
 import { Material } from './material';
 import { MaterialDwell } from './material-dwell';
 import { Piece } from './piece';
+import { PlanSearch } from './plan-search';
 import { Production } from './production';
 import { Purchase } from './purchase';
 import { Recipe } from './recipe';
@@ -68,6 +69,7 @@ export * from './material';
 export * from './material-dwell';
 export * from './pattern-columns';
 export * from './piece';
+export * from './plan-search';
 export * from './production';
 export * from './purchase';
 export * from './recipe';
@@ -113,6 +115,7 @@ export const entities = [
   Material,
   MaterialDwell,
   Piece,
+  PlanSearch,
   Production,
   Purchase,
   Recipe,

@@ -1,5 +1,5 @@
 import { Check, Column, Entity, JoinColumn, ManyToOne, PrimaryColumn, Unique, type Relation } from 'typeorm';
-import { WorkingRevision } from './working-revision';
+import { type MeasureValue, WorkingRevision } from './working-revision';
 
 /** Weights and limits of the studio, checked whole by the contract's `StudioSettings` before they are written. */
 export interface StudioSettingsValue {
@@ -26,6 +26,25 @@ export interface ForecastSettingsValue {
   readonly deliveryLatePermille: number;
   readonly absencePermille: number;
   readonly climateSpreadPermille: number;
+}
+
+/** What may be proposed for a date at risk, checked whole by the contract's `RescueSettings` before it is written. */
+export interface RescueSettingsValue {
+  readonly allowed: readonly MeasureValue['kind'][];
+  readonly eveningMinutes: number;
+  readonly eveningDays: number;
+  readonly weekendMinutes: number;
+  readonly freelancerDayMinor: number;
+  readonly freelancerDays: number;
+  readonly heatCelsius: number;
+  readonly heatHourMinor: number;
+  readonly mouldMinor: number;
+  readonly materialMinor: number;
+  readonly signOffMinor: number;
+  readonly partDeliveryMinor: number;
+  readonly laterDayMinor: number;
+  readonly laterDays: number;
+  readonly goalPermille: number;
 }
 
 /** The workshop: one row in each installation, made by the first migration. It also points at the head of the working plan. */
@@ -57,6 +76,9 @@ export class Studio {
 
   @Column({ type: 'jsonb' })
   forecast: ForecastSettingsValue;
+
+  @Column({ type: 'jsonb' })
+  rescue: RescueSettingsValue;
 
   /** The working revision that stands; null until the first plan is laid out. */
   @Column({ type: 'uuid', nullable: true })

@@ -1,4 +1,5 @@
 import { Column, Entity, Index, JoinColumn, ManyToOne, PrimaryColumn, Unique, type Relation } from 'typeorm';
+import type { Measure } from '@common/rescue';
 import { Account } from './account';
 
 /** Where one stage stands in a plan, as the engine's `Placement` has it; minutes since 1970-01-01T00:00Z. */
@@ -17,10 +18,14 @@ export interface PinValue {
   readonly bayIds: readonly string[] | null;
 }
 
-/** A whole working plan: placements, and pins by stage. */
+/** A measure that a working plan counts on, as the engine's `Measure` has it. */
+export type MeasureValue = Measure;
+
+/** A whole working plan: placements, pins by stage, and the measures that it counts on (none where it is absent). */
 export interface LayoutValue {
   readonly plan: { readonly placements: readonly PlacementValue[] };
   readonly pins: Readonly<Record<string, PinValue>>;
+  readonly measures?: readonly MeasureValue[];
 }
 
 /** One state of the working plan. Undo goes to the parent, redo to the child laid out last; nothing is ever rewritten. */

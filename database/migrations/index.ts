@@ -4,6 +4,7 @@ import { WorkToBeDone1764547203000 } from './1764547203000-work-to-be-done';
 import { StudioAndPlans1764547204000 } from './1764547204000-studio-and-plans';
 import { FeedState1764547205000 } from './1764547205000-feed-state';
 import { Forecast1764547206000 } from './1764547206000-forecast';
+import { Rescues1764547207000 } from './1764547207000-rescues';
 
 /** Every migration in its order, listed by hand: a glob would not survive bundling. */
 export const migrations = [
@@ -13,4 +14,5 @@ export const migrations = [
   StudioAndPlans1764547204000,
   FeedState1764547205000,
   Forecast1764547206000,
+  Rescues1764547207000,
 ] as const;

@@ -1,6 +1,8 @@
+import type { LevelProgress } from '@common/planning';
 import type { ForecastFound, ForecastProgress, ForecastTask } from './forecast-task';
 import type { LevelFound, LevelTask } from './level-task';
-import type { LevelProgress } from '@common/planning';
+import type { PromiseFound, PromiseTask } from './promise-task';
+import type { RescueFound, RescueTask, SearchProgress } from './rescue-task';
 
 /** Counts up when a message changes, so that a worker of another build is not misunderstood. */
 export const PROTOCOL = 2;
@@ -13,6 +15,8 @@ export interface Jobs {
     readonly progress: ForecastProgress;
     readonly found: ForecastFound;
   };
+  readonly promise: { readonly task: PromiseTask; readonly progress: SearchProgress; readonly found: PromiseFound };
+  readonly rescue: { readonly task: RescueTask; readonly progress: SearchProgress; readonly found: RescueFound };
 }
 export type JobName = keyof Jobs;
 

@@ -2,10 +2,17 @@ import { parentPort } from 'node:worker_threads';
 import { runForecast } from './forecast-task';
 import { PROTOCOL, type JobHooks, type JobMessage, type JobName, type Jobs, type WorkerMessage } from './job-message';
 import { runLevel } from './level-task';
+import { runPromise } from './promise-task';
+import { runRescue } from './rescue-task';
 
 type Runner<N extends JobName> = (task: Jobs[N]['task'], hooks: JobHooks<N>) => Jobs[N]['found'];
 
-const RUNNERS: { readonly [N in JobName]: Runner<N> } = { level: runLevel, forecast: runForecast };
+const RUNNERS: { readonly [N in JobName]: Runner<N> } = {
+  level: runLevel,
+  forecast: runForecast,
+  promise: runPromise,
+  rescue: runRescue,
+};
 const PROGRESS_EVERY_MS = 100;
 
 function say(message: WorkerMessage): void {

@@ -7,6 +7,7 @@ import type { WorkingRevision } from '@database/entities';
 import { directoryOf, formatIn, namesOf } from './directory';
 import { RevisionRepository } from './revision-repository';
 import { minuteOf, snapshotOf, type Pins } from './snapshot';
+import { applyMeasures, type Measure } from '@common/rescue';
 import { readStudioRows, type StudioRows } from './snapshot-repository';
 
 const MINUTES_PER_HOUR = 60;
@@ -19,6 +20,8 @@ export interface Desk {
   readonly rows: StudioRows;
   readonly head: WorkingRevision | null;
   readonly pins: Pins;
+  /** What the working plan counts on besides what the studio has. */
+  readonly measures: readonly Measure[];
   readonly now: number;
   /** Where the problem's horizon begins; see `planningFrom`. */
   readonly from: number;
@@ -41,16 +44,18 @@ export async function readDesk(manager: EntityManager, at: Date): Promise<Desk> 
   const { headRevisionId, zone } = rows.studio;
   const head = headRevisionId === null ? null : await new RevisionRepository(manager).byId(headRevisionId);
   const pins = head?.layout.pins ?? {};
+  const measures = head?.layout.measures ?? [];
   const now = minuteOf(at);
   const from = planningFrom(head, now, zone);
-  const snapshot = snapshotOf(rows, pins);
+  const snapshot = applyMeasures(snapshotOf(rows, pins), measures);
   const problem = buildProblem(snapshot, { now: from, horizonEnd: null });
   const plan = takeInProgress(problem, head?.layout.plan ?? { placements: [] });
-  const directory = directoryOf(rows);
+  const directory = directoryOf(rows, measures);
   return {
     rows,
     head,
     pins,
+    measures,
     now,
     from,
     snapshot,
@@ -62,6 +67,14 @@ export async function readDesk(manager: EntityManager, at: Date): Promise<Desk> 
     names: namesOf(directory),
     format: formatIn(zone),
   };
+}
+
+/** The problem of the same studio from a minute on, with other pins or measures. */
+export function problemOf(
+  { rows, measures: counted, pins: held }: Pick<Desk, 'rows' | 'measures' | 'pins'>,
+  { from, pins = held, measures = counted }: Partial<Pick<Desk, 'pins' | 'measures'>> & Pick<Desk, 'from'>,
+): Problem {
+  return buildProblem(applyMeasures(snapshotOf(rows, pins), measures), { now: from, horizonEnd: null });
 }
 
 /**

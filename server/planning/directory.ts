@@ -2,10 +2,11 @@ import type { Directory } from '@common/contract';
 import { KEY_DATE_NAMES } from '@common/domain/key-date';
 import { formatDayAndTime } from '@common/time/format-instant';
 import type { FormatInstant, Names } from '@common/planning';
+import type { Measure } from '@common/rescue';
 import type { StudioRows } from './snapshot-repository';
 
 /** Names for every id that a plan of these rows may use. */
-export function directoryOf(rows: StudioRows): Directory {
+export function directoryOf(rows: StudioRows, measures: readonly Measure[]): Directory {
   const productionOf = new Map(rows.pieces.map((piece) => [piece.id, piece.productionId]));
   return {
     productions: rows.productions.map(({ id, name, mark, hue, state, client }) => ({
@@ -32,13 +33,25 @@ export function directoryOf(rows: StudioRows): Directory {
       cautions: stage.cautions,
       version: stage.version,
     })),
-    makers: rows.makers.map(({ id, name, initials }) => ({ id, name, initials })),
+    makers: [
+      ...rows.makers.map(({ id, name, initials }) => ({ id, name, initials })),
+      ...freelancersOf(rows, measures),
+    ],
     crafts: rows.crafts.map(({ id, key, name }) => ({ id, key, name })),
     bays: rows.bays.map(({ id, name, kind, pieceId }) => ({ id, name, kind, pieceId })),
     keyDates: rows.productions.flatMap(({ id: productionId, keyDates }) =>
       keyDates.map(({ id, kind }) => ({ id, productionId, kind })),
     ),
   };
+}
+
+/** Those whom the plan counts on and nobody has entered yet. */
+function freelancersOf({ crafts }: StudioRows, measures: readonly Measure[]): Directory['makers'] {
+  return measures.flatMap((measure) => {
+    if (measure.kind !== 'freelancer') return [];
+    const craft = crafts.find(({ id }) => id === measure.craftId)?.name.toLowerCase() ?? 'a craft';
+    return [{ id: measure.makerId, name: `Freelancer for ${craft}`, initials: 'Fr' }];
+  });
 }
 
 /** How sentences call what a directory lists; what it does not list is something that is there no more. */

@@ -9,14 +9,26 @@ import { Loads } from './load-view';
 import type { PlanningParts } from './planning-routes';
 import { Proposals } from './proposals';
 import { Revisions } from './revisions';
+import { Promises } from './searches/promises';
+import { Rescues } from './searches/rescues';
+import type { SearchRuns } from './searches/search-runs';
 import { WorkingPlan } from './working-plan';
 
 export { LevelRuns } from './level-runs';
+export { SearchRuns } from './searches/search-runs';
 export { mountPlanning } from './planning-routes';
 export { readIssued } from './snapshot-repository';
 
+/** What planning is made of. */
+export interface PlanningNeeds {
+  readonly transactions: Transactions;
+  readonly levelRuns: LevelRuns;
+  readonly searchRuns: SearchRuns;
+  readonly jobPool: JobPool;
+}
+
 /** Everything that the routes of planning work with. */
-export function createPlanningParts(transactions: Transactions, levelRuns: LevelRuns, pool: JobPool): PlanningParts {
+export function createPlanningParts({ transactions, levelRuns, searchRuns, jobPool }: PlanningNeeds): PlanningParts {
   return {
     workingPlan: new WorkingPlan(transactions),
     revisions: new Revisions(transactions),
@@ -25,6 +37,8 @@ export function createPlanningParts(transactions: Transactions, levelRuns: Level
     issues: new Issues(transactions),
     dates: new Dates(transactions),
     loads: new Loads(transactions),
-    forecasts: new Forecasts(transactions, pool),
+    promises: new Promises(transactions, searchRuns),
+    rescues: new Rescues(transactions, searchRuns),
+    forecasts: new Forecasts(transactions, jobPool),
   };
 }

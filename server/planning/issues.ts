@@ -34,7 +34,7 @@ export class Issues {
         changes,
         forMakers: [...counts].map(([makerId, count]) => ({ makerId, changes: count })),
         keyDates: keyDateEffects(desk.problem, before, desk.plan),
-        obstacles: [...(desk.isStale ? [STALE] : []), ...sayAll(desk, obstaclesOf(desk))],
+        obstacles: [...(desk.isStale ? [STALE] : []), ...sayStrangers(desk), ...sayAll(desk, obstaclesOf(desk))],
         warnings: sayAll(
           desk,
           desk.unmet.filter(({ rule }) => MAY_BE_ISSUED.has(rule)),
@@ -51,7 +51,7 @@ export class Issues {
     return this.transactions.write(actor, async (unit) => {
       const desk = await requireDesk(unit, revision);
       if (desk.head === null || desk.isStale) throw new Problem('plan-stale', STALE);
-      const obstacles = sayAll(desk, obstaclesOf(desk));
+      const obstacles = [...sayStrangers(desk), ...sayAll(desk, obstaclesOf(desk))];
       if (obstacles.length > 0) {
         const errors = obstacles.map((detail) => ({ pointer: '', detail }));
         throw new Problem('plan-unsound', obstacles[0], { errors });
@@ -111,6 +111,18 @@ function issuedBefore({ rows }: Desk): Plan {
 
 function obstaclesOf({ unmet }: Desk): Unmet[] {
   return unmet.filter(({ rule }) => !MAY_BE_ISSUED.has(rule));
+}
+
+/** Nobody can be told of work who is not in the crew: a freelancer whom the plan counts on has to be entered first. */
+function sayStrangers({ measures, names, plan }: Desk): string[] {
+  const working = new Set(plan.placements.flatMap(({ crew }) => crew.map(({ makerId }) => makerId)));
+  return measures.flatMap((measure) =>
+    measure.kind === 'freelancer' && working.has(measure.makerId)
+      ? [
+          `${names.maker(measure.makerId)} has work in the plan but is not in the crew. Enter them there, drop the measure, and level again.`,
+        ]
+      : [],
+  );
 }
 
 function sayAll({ names, format }: Desk, unmet: readonly Unmet[]): string[] {

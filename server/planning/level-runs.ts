@@ -3,7 +3,6 @@ import { setTimeout as pause } from 'node:timers/promises';
 import type { z } from 'zod';
 import type { LevelRequest, LevelRun as LevelRunView } from '@common/contract';
 import { takeInProgress } from '@common/planning';
-import { buildProblem } from '@common/planning-input';
 import { LevelRun } from '@database/entities';
 import { notFound, Problem } from '../http/problem';
 import type { Log } from '../http/log';
@@ -15,10 +14,9 @@ import { CANCEL_CHANNEL } from '../storage/live-channel';
 import { ProcessMark } from '../storage/process-mark';
 import type { Transactions } from '../storage/transactions';
 import type { Unit } from '../storage/unit';
-import { nameOfContent } from './desk';
+import { nameOfContent, problemOf } from './desk';
 import { isUnderWay, levelRunView, LevelRepository } from './level-repository';
 import { requireDesk } from './revisions';
-import { snapshotOf } from './snapshot';
 
 type Request = z.output<typeof LevelRequest>;
 
@@ -57,7 +55,7 @@ export class LevelRuns {
       const desk = await requireDesk(unit, request.revision);
       await this.#refuseSecond(unit);
       const plannedFrom = desk.now - (desk.now % GRAIN_MINUTES);
-      const problem = buildProblem(snapshotOf(desk.rows, desk.pins), { now: plannedFrom, horizonEnd: null });
+      const problem = problemOf(desk, { from: plannedFrom });
       const made = unit.manager.create(LevelRun, {
         id: randomUUID(),
         state: 'waiting',

@@ -6,6 +6,8 @@ import type { Issues } from './issues';
 import type { LevelRuns } from './level-runs';
 import type { Loads } from './load-view';
 import type { Proposals } from './proposals';
+import type { Promises } from './searches/promises';
+import type { Rescues } from './searches/rescues';
 import type { Revisions } from './revisions';
 import type { WorkingPlan } from './working-plan';
 
@@ -19,6 +21,8 @@ export interface PlanningParts {
   readonly dates: Dates;
   readonly loads: Loads;
   readonly forecasts: Forecasts;
+  readonly rescues: Rescues;
+  readonly promises: Promises;
 }
 
 /** The working plan, levelling and issuing. */
@@ -42,4 +46,19 @@ export function mountPlanning(api: Api, parts: PlanningParts): void {
   api.on(endpoints.readForecast, () => forecasts.read());
   api.on(endpoints.readPastHours, () => forecasts.pastHours());
   api.on(endpoints.readLoad, ({ query }) => loads.read(query.by));
+  mountSearches(api, parts);
+}
+
+/** What would save a date, and when an enquiry could be ready. */
+function mountSearches(api: Api, { rescues, promises }: PlanningParts): void {
+  api.on(endpoints.startRescue, ({ actor, body }) => rescues.start(actor, body.keyDateId));
+  api.on(endpoints.readRescue, ({ params }) => rescues.read(params.id));
+  api.on(endpoints.cancelRescue, ({ params }) => rescues.cancel(params.id));
+  api.on(endpoints.takeRescue, ({ actor, params, body }) => rescues.take(actor, params.id, body));
+  api.on(endpoints.listMeasures, () => rescues.measures());
+  api.on(endpoints.dropMeasure, ({ actor, body }) => rescues.drop(actor, body));
+  api.on(endpoints.startPromise, ({ actor, body }) => promises.start(actor, body.productionId));
+  api.on(endpoints.listPromises, () => promises.list());
+  api.on(endpoints.readPromise, ({ params }) => promises.read(params.id));
+  api.on(endpoints.cancelPromise, ({ params }) => promises.cancel(params.id));
 }

@@ -1,17 +1,15 @@
 import type { LevelProposal } from '@common/contract';
 import { check, measure, takeInProgress, type Problem as PlanningProblem } from '@common/planning';
-import { buildProblem } from '@common/planning-input';
 import type { LevelRun } from '@database/entities';
 import { Problem } from '../http/problem';
 import type { Actor } from '../session';
 import type { Transactions } from '../storage/transactions';
 import { keyDateEffects, sayChanges } from './changes';
-import { nameOfContent, readDesk, type Desk } from './desk';
+import { nameOfContent, problemOf, readDesk, type Desk } from './desk';
 import { isUnderWay, levelRunView, LevelRepository } from './level-repository';
 import { requireRun } from './level-runs';
 import { recordRevised, requireDesk } from './revisions';
 import { RevisionRepository } from './revision-repository';
-import { snapshotOf } from './snapshot';
 
 const LABELS = { dates: 'Level', 'within-dates': 'Even out the load' } as const;
 
@@ -52,7 +50,7 @@ export class Proposals {
       const count = await new RevisionRepository(unit.manager).add(unit, desk.rows.studio, {
         parentId: run.baseId,
         label,
-        layout: { plan, pins: desk.pins },
+        layout: { plan, pins: desk.pins, measures: desk.measures },
         fingerprint: run.fingerprint,
         plannedFrom: run.plannedFrom,
       });
@@ -71,7 +69,7 @@ function requireFresh(
 ): { readonly plan: NonNullable<LevelRun['found']>; readonly problem: PlanningProblem } {
   if (isUnderWay(run)) throw new Problem('level-running', 'It is still levelling. Wait for it, or stop it first.');
   if (run.found === null) throw new Problem('not-found', 'This levelling found nothing.');
-  const problem = buildProblem(snapshotOf(desk.rows, desk.pins), { now: run.plannedFrom, horizonEnd: null });
+  const problem = problemOf(desk, { from: run.plannedFrom });
   if (desk.head?.id !== run.baseId || nameOfContent(problem) !== run.fingerprint) {
     throw new Problem('plan-stale', 'The studio or its working plan changed since this was found. Level again.');
   }

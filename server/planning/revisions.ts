@@ -6,10 +6,9 @@ import { invalidField, Problem } from '../http/problem';
 import type { Actor } from '../session';
 import type { Transactions } from '../storage/transactions';
 import type { Unit } from '../storage/unit';
-import { nameOfContent, readDesk, type Desk } from './desk';
+import { nameOfContent, problemOf, readDesk, type Desk } from './desk';
 import { RevisionRepository } from './revision-repository';
-import { snapshotOf, type Pins } from './snapshot';
-import { buildProblem } from '@common/planning-input';
+import type { Pins } from './snapshot';
 
 type Revised = { readonly revision: number };
 
@@ -24,7 +23,7 @@ export class Revisions {
       const { stageId, start, makerIds, bayIds } = move;
       requireMovable(desk, move);
       const pins = { ...desk.pins, [stageId]: { start, makerIds, bayIds } };
-      const pinned = problemWith(desk, pins);
+      const pinned = problemOf(desk, { from: desk.from, pins });
       const { plan } = replaceAfterMove(pinned, desk.plan, { stageId, start, makerIds, bayIds });
       const label = `Move ${desk.names.stage(stageId)}`;
       return this.#store(unit, desk, { label, pins: onlyKnown(pins, desk), plan });
@@ -77,8 +76,8 @@ export class Revisions {
     const count = await new RevisionRepository(unit.manager).add(unit, desk.rows.studio, {
       parentId: desk.head?.id ?? null,
       label,
-      layout: { plan, pins },
-      fingerprint: nameOfContent(problemWith(desk, pins)),
+      layout: { plan, pins, measures: desk.measures },
+      fingerprint: nameOfContent(problemOf(desk, { from: desk.from, pins })),
       plannedFrom: desk.from,
     });
     await recordRevised(unit, desk.rows.studio, 'revised', `Working plan: ${label}.`);
@@ -103,10 +102,6 @@ export async function requireDesk(unit: Unit, revision: number): Promise<Desk> {
     });
   }
   return desk;
-}
-
-function problemWith(desk: Desk, pins: Pins): Desk['problem'] {
-  return buildProblem(snapshotOf(desk.rows, pins), { now: desk.from, horizonEnd: null });
 }
 
 /** Pins of stages that are no more go with them. */

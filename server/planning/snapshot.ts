@@ -21,8 +21,9 @@ export function snapshotOf(rows: StudioRows, pins: Pins): StudioSnapshot {
     room: constantClimate(room),
     makers: rows.makers.filter((maker) => maker.active).map(makerOf),
     bays: rows.bays.filter((bay) => bay.active).map((bay) => bayOf(bay, room)),
-    materials: rows.materials.map(({ id, dwells, referenceCelsius, referenceHumidityPercent }) => ({
+    materials: rows.materials.map(({ id, family, dwells, referenceCelsius, referenceHumidityPercent }) => ({
       id,
+      family,
       milestones: inOrder(dwells).map(
         ({ milestone, law, minimumCelsius, maximumCelsius, lowMinutes, likelyMinutes, highMinutes }) => ({
           milestone,
@@ -85,6 +86,7 @@ function bayOf(bay: Bay, room: { readonly celsius: number; readonly humidityPerc
   const hasOwnClimate = celsius !== null || humidityPercent !== null;
   return {
     id: bay.id,
+    isMould: bay.pieceId !== null,
     capacity: bay.capacity,
     openings: inOrder(bay.openings).map(patternOf),
     climate: hasOwnClimate

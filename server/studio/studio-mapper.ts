@@ -3,8 +3,8 @@ import type { AuditEntry, Closure, Studio } from '@database/entities';
 
 /** The studio as everybody in it may see it. */
 export function studioView(studio: Studio): StudioView {
-  const { id, name, zone, currency, settings, forecast, version } = studio;
-  return { id, name, zone, currency, settings, forecast, version };
+  const { id, name, zone, currency, settings, forecast, rescue, version } = studio;
+  return { id, name, zone, currency, settings, forecast, rescue: { ...rescue, allowed: [...rescue.allowed] }, version };
 }
 
 /** Days on which the studio is closed. */

@@ -30,15 +30,24 @@ export class StudioService {
       const studio = await repository.studio();
       const before = studioView(studio);
       requireVersion(before, change);
-      const { settings, forecast, version: _version, ...fields } = change;
+      const { settings, forecast, rescue, version: _version, ...fields } = change;
       Object.assign(studio, sentMembers(fields), { version: studio.version + 1 });
       studio.settings = { ...studio.settings, ...(settings && sentMembers(settings)) };
       studio.forecast = { ...studio.forecast, ...(forecast && sentMembers(forecast)) };
+      studio.rescue = { ...studio.rescue, ...(rescue && sentMembers(rescue)) };
       await repository.saveStudio(studio);
       const after = studioView(studio);
       const what = changedFields(
-        { ...before, ...before.settings, ...before.forecast },
-        { ...after, ...after.settings, ...after.forecast, settings: before.settings, forecast: before.forecast },
+        { ...before, ...before.settings, ...before.forecast, ...before.rescue },
+        {
+          ...after,
+          ...after.settings,
+          ...after.forecast,
+          ...after.rescue,
+          settings: before.settings,
+          forecast: before.forecast,
+          rescue: before.rescue,
+        },
       );
       const sentence = `Changed the studio: ${what}.`;
       await unit.record({ action: 'changed', subject: { kind: 'studio', id: studio.id }, sentence, before, after });

@@ -161,7 +161,7 @@ describe('the database', () => {
     ['a maker who goes while at work', `delete from maker`, FOREIGN_KEY],
     [
       'a second studio',
-      `insert into studio (id, name, zone, currency, settings, forecast) select gen_random_uuid(), name, zone, currency, settings, forecast from studio`,
+      `insert into studio (id, name, zone, currency, settings, forecast, rescue) select gen_random_uuid(), name, zone, currency, settings, forecast, rescue from studio`,
       UNIQUE,
     ],
     [

@@ -32,8 +32,14 @@ export async function furnish(manager: Visitor): Promise<Workshop> {
 }
 
 /** A production with one empty piece. */
-export async function addProduction(manager: Visitor, clientId: string, name: string, keyDates: object[] = []) {
-  const fields = { name, clientId, mark: 'Ab', hue: 3, state: 'committed', keyDates };
+export async function addProduction(
+  manager: Visitor,
+  clientId: string,
+  name: string,
+  keyDates: object[] = [],
+  state: 'committed' | 'tentative' = 'committed',
+) {
+  const fields = { name, clientId, mark: 'Ab', hue: 3, state, keyDates };
   const production = (await manager.post('/api/productions', fields)).body;
   const whole = (await manager.post(`/api/productions/${production.id}/pieces`, { name: 'Moon', recipe: null })).body;
   return { productionId: production.id as string, pieceId: whole.piecesInOrder[0].id as string };
