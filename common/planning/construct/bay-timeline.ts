@@ -16,6 +16,16 @@ export class BayTimeline {
     this.used[0] = 0;
   }
 
+  /** Becomes a copy of another timeline of the same capacity. */
+  copyFrom(other: BayTimeline): void {
+    while (this.at.length < other.count) this.grow();
+    for (let k = 0; k < other.count; k += 1) {
+      this.at[k] = other.at[k];
+      this.used[k] = other.used[k];
+    }
+    this.count = other.count;
+  }
+
   /**
    * When the last clash ends that units from `start` until `end` would meet; -1 where they fit. Nothing that starts before then
    * and lasts as long can fit either.

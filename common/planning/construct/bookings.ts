@@ -19,6 +19,18 @@ export class Bookings {
     return low;
   }
 
+  /** The last booking that begins before an instant; -1 where none does. */
+  lastBefore(instant: number): number {
+    let low = 0;
+    let high = this.count;
+    while (low < high) {
+      const middle = (low + high) >> 1;
+      if (this.starts[middle] < instant) low = middle + 1;
+      else high = middle;
+    }
+    return low - 1;
+  }
+
   /** Start of the first booking that ends after an instant, NEVER where there is none. */
   nextStart(instant: number): number {
     const i = this.indexAt(instant);
@@ -51,6 +63,17 @@ export class Bookings {
     this.ends.copyWithin(i, i + 1, this.count);
     this.stages.copyWithin(i, i + 1, this.count);
     this.count -= 1;
+  }
+
+  /** Becomes a copy of another maker's or layout's bookings. */
+  copyFrom(other: Bookings): void {
+    while (this.starts.length < other.count) this.grow();
+    for (let i = 0; i < other.count; i += 1) {
+      this.starts[i] = other.starts[i];
+      this.ends[i] = other.ends[i];
+      this.stages[i] = other.stages[i];
+    }
+    this.count = other.count;
   }
 
   clear(): void {

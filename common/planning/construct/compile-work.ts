@@ -1,11 +1,12 @@
 import type { Maker, Problem, Stage } from '../problem/problem';
-import { NEVER } from './calendar';
+import { Calendar, NEVER } from './calendar';
 import { chooseHousings } from './choose-housings';
 import {
   CLOCK,
   type Compiled,
   type CompiledMakers,
   type CompiledWork,
+  type Crew,
   FINISHED,
   FIXED_START,
   FREE,
@@ -46,6 +47,7 @@ export function compileWork(
   const places = stages.flatMap((stage) => stage.places);
   const fixed = stages.map((stage) => findFixity(problem, stage));
   const window = stages.map((stage) => stage.dwell?.window ?? null);
+  const crews = chooseCrews(stages, makers, calendars, craftIds);
   return {
     minutes: Int32Array.from(stages, minutesLeft),
     isDuration: Uint8Array.from(stages, (stage) => (stage.effort.kind === 'duration' ? 1 : 0)),
@@ -59,7 +61,8 @@ export function compileWork(
     needLeast: Int32Array.from(needs, (need) => need.least),
     needMost: Int32Array.from(needs, (need) => need.most),
     crewLoss: Int32Array.from(stages, (stage) => stage.crewLossPermille),
-    crews: chooseCrews(stages, makers, calendars, craftIds),
+    crews,
+    anyTime: anyTimeOf(crews, calendars, problem.horizon.end - origin),
     placeOf: offsetsOf(stages, (stage) => stage.places.length),
     placeUnits: Int32Array.from(places, (place) => place.units),
     placeHold: Uint8Array.from(places, (place) => HOLD[place.hold.kind]),
@@ -79,6 +82,29 @@ export function compileWork(
     windowCost: Float64Array.from(window, (one) => (one?.kind === 'soft' ? one.costMinor : 0)),
     curves: compileCurves(problem, stages, bayIndex),
     keptPlace: Int32Array.from(stages, (stage) => stage.places.findIndex((place) => place.hold.kind !== 'work')),
+  };
+}
+
+/** The ordinary time of anyone in a stage's crews, worked out when it is first asked for and once for stages that choose from the same. */
+function anyTimeOf(
+  crewsOf: readonly (readonly Crew[])[],
+  { ordinary }: CompiledMakers,
+  horizonMinutes: number,
+): CompiledWork['anyTime'] {
+  const known = new Map<readonly Crew[], Calendar>();
+  return (stage) => {
+    const crews = crewsOf[stage];
+    if (crews.length === 0) return null;
+    let time = known.get(crews);
+    if (!time) {
+      const able = [...new Set(crews.flatMap((crew) => [...crew.makers]))];
+      time = Calendar.anyOf(
+        able.map((maker) => ordinary[maker]),
+        horizonMinutes,
+      );
+      known.set(crews, time);
+    }
+    return time;
   };
 }
 

@@ -65,6 +65,8 @@ export interface CompiledWork {
   readonly crewLoss: Int32Array;
   /** Crews to choose from, for each stage; empty where nobody is needed. */
   readonly crews: readonly (readonly Crew[])[];
+  /** The ordinary time of all who are in any of a stage's crews; null where nobody is needed, or where it is not known. */
+  readonly anyTime: (stage: number) => Calendar | null;
   readonly placeOf: Int32Array;
   readonly placeUnits: Int32Array;
   readonly placeHold: Uint8Array;

@@ -8,16 +8,23 @@ import { NEVER } from './calendar';
 export class CuringCurve {
   private readonly from: Float64Array;
   private readonly rate: Float64Array;
+  private readonly fastest: number;
   /** Age gained from the first piece's start until each piece's. */
   private readonly gained: Float64Array;
 
   constructor(profile: AdvanceProfile, origin: number) {
     this.from = Float64Array.from(profile.from, (at) => at - origin);
     this.rate = Float64Array.from(profile.permille);
+    this.fastest = Math.max(...this.rate);
     this.gained = new Float64Array(this.from.length);
     for (let k = 1; k < this.from.length; k += 1) {
       this.gained[k] = this.gained[k - 1] + (this.from[k] - this.from[k - 1]) * this.rate[k - 1];
     }
+  }
+
+  /** Fewer minutes than this never gain an age, whenever they begin. */
+  leastMinutes(age: number): number {
+    return this.fastest > 0 ? Math.min(NEVER, Math.ceil(age / this.fastest)) : NEVER;
   }
 
   /** The first whole minute by which `age` is gained after `start`; NEVER where it never is. */

@@ -1,11 +1,8 @@
 import { type Calendar, NEVER } from './calendar';
-import { CLOCK, type Compiled, type Crew, FREE, HOLD_DWELL, HOLD_UNTIL, SESSION } from './compiled';
+import { type Compiled, type Crew, HOLD_DWELL, HOLD_UNTIL, HOLD_WORK } from './compiled';
 import { curedBy } from './cured-by';
-import { type Fit, type Layout, pushSpan } from './layout';
-import { ReadyTimes } from './ready-times';
-
-/** A `free` stage is not split into pieces shorter than this, but for its last. In minutes. */
-const LEAST_PIECE = 30;
+import type { Fit, Layout } from './layout';
+import { WorkBuilder } from './work-builder';
 
 /** What a placement must not come before, who does it and where. Instants are minutes from the horizon's start. */
 export interface Ask {
@@ -19,6 +16,8 @@ export interface Ask {
   lowFinish: number;
   /** No start after this one is of use. */
   lastStart: number;
+  /** No end of work after this one is of use; NEVER where any is. */
+  lastEnd: number;
   /** Whether overtime may be worked. */
   overtime: boolean;
 }
@@ -32,44 +31,43 @@ export type Leniency = 'none' | 'bays' | 'other-work' | 'calendars';
  * search only goes forward and ends with the horizon.
  */
 export class Fitter {
-  leniency: Leniency = 'none';
-  private readonly ready = new ReadyTimes();
   private readonly compiled: Compiled;
-  private calendars: (Calendar | null)[] = [];
-  private calendarCount = 0;
-  /** Set by the span builders: the start found, and the end. */
-  private from = 0;
-  private until = 0;
+  private readonly builder: WorkBuilder;
 
   constructor(private readonly layout: Layout) {
     this.compiled = layout.compiled;
+    this.builder = new WorkBuilder(layout);
+  }
+
+  get leniency(): Leniency {
+    return this.builder.leniency;
+  }
+
+  set leniency(leniency: Leniency) {
+    this.builder.leniency = leniency;
   }
 
   /** Fits a stage as early as may be; false where it fits nowhere before `lastStart` and the horizon's end. */
   fit(ask: Ask, out: Fit): boolean {
-    this.gatherCalendars(ask);
+    const { builder } = this;
+    builder.prepare(ask);
     let t = ask.lowStart;
     while (t <= ask.lastStart) {
-      if (!this.buildWork(ask, t, out) || this.until > this.compiled.horizonMinutes || this.from > ask.lastStart)
-        return false;
-      const finish = this.dwellEnd(ask, this.until);
-      const retry = this.nextTry(ask, this.from, this.until, finish);
+      if (!builder.build(ask, t, out) || builder.until > this.compiled.horizonMinutes) return false;
+      const { from, until } = builder;
+      if (from > ask.lastStart || until > ask.lastEnd) return false;
+      const finish = this.dwellEnd(ask, until);
+      const retry = this.nextTry(ask, from, until, finish);
       if (retry < 0) {
-        out.start = this.from;
-        out.end = this.until;
+        out.start = from;
+        out.end = until;
         out.finish = finish;
         return true;
       }
       if (retry >= NEVER) return false;
-      t = Math.max(retry, this.from + 1);
+      t = Math.max(retry, from + 1);
     }
     return false;
-  }
-
-  /** The crew's index where what is known of its free time applies to the ask; else -1. */
-  private crewKnown(ask: Ask): number {
-    if (!ask.crew || ask.overtime || this.leniency !== 'none' || ask.minutes === 0 || ask.minutes >= NEVER) return -1;
-    return this.compiled.work.continuity[ask.stage] === CLOCK ? -1 : ask.crew.index;
   }
 
   /** When a stage's dwell would end after work that ends at an instant, where it is housed. */
@@ -127,16 +125,28 @@ export class Fitter {
     return retry;
   }
 
-  /** The first instant from `low` on at which bays have room for a stage to begin and work for at least so many minutes. */
-  bayFreeFrom(stage: number, housing: Int32Array, minutes: number, low: number): number {
-    const { placeOf, placeUnits } = this.compiled.work;
+  /**
+   * An instant before which no crew of a stage can begin, for the room that its bays have from `low` on: time for so many minutes
+   * of work when anyone is there, and for the dwell.
+   */
+  bayFreeFrom(ask: Ask, minutes: number, dwell: number, low: number): number {
+    const { work } = this.compiled;
+    const { stage, housing } = ask;
+    if (housing === null || housing.length === 0) return low;
+    const time = minutes > 0 ? this.builder.times.ofAny(stage, ask.overtime, housing) : null;
     let t = low;
     for (let settled = false; !settled && t < NEVER;) {
       settled = true;
+      const start = time ? time.nextFrom(t) : t;
+      const end = time ? time.endOf(t, minutes) : t + minutes;
+      if (start >= NEVER || end >= NEVER) return NEVER;
+      t = start;
       for (let k = 0; k < housing.length; k += 1) {
-        const until = this.layout.bays[housing[k]].clashEnd(t, t + minutes, placeUnits[placeOf[stage] + k]);
-        if (until <= t) continue;
-        t = until;
+        const place = work.placeOf[stage] + k;
+        const until = work.placeHold[place] === HOLD_WORK ? end : end + dwell;
+        const clash = this.layout.bays[housing[k]].clashEnd(start, until, work.placeUnits[place]);
+        if (clash <= t) continue;
+        t = clash;
         settled = false;
       }
     }
@@ -147,148 +157,4 @@ export class Fitter {
     const { ordinary, extended } = this.compiled.makers;
     return overtime ? extended[maker] : ordinary[maker];
   }
-
-  /** The calendars that the work must lie in: the crew's first, then the bays' opening hours. */
-  private gatherCalendars(ask: Ask): void {
-    this.calendarCount = 0;
-    if (this.leniency === 'calendars') return;
-    if (ask.crew)
-      for (const maker of ask.crew.makers) this.calendars[this.calendarCount++] = this.calendarOf(maker, ask.overtime);
-    if (!ask.housing) return;
-    for (const bay of ask.housing) {
-      const open = bay >= 0 ? this.compiled.bays.open[bay] : null;
-      if (open) this.calendars[this.calendarCount++] = open;
-    }
-  }
-
-  /** Builds the work from `t` on by the stage's continuity; false where the calendars end first. */
-  private buildWork(ask: Ask, t: number, out: Fit): boolean {
-    out.spanCount = 0;
-    if (ask.minutes === 0) {
-      this.from = t;
-      this.until = t;
-      return true;
-    }
-    if (ask.minutes >= NEVER) return false;
-    const continuity = this.compiled.work.continuity[ask.stage];
-    if (continuity === SESSION || continuity === CLOCK || this.calendarCount === 0)
-      return this.buildSession(ask, t, out);
-    return continuity === FREE ? this.buildFree(ask, t, out) : this.buildShifts(ask, t, out);
-  }
-
-  private buildSession(ask: Ask, from: number, out: Fit): boolean {
-    let t = from;
-    for (let settled = false; !settled;) {
-      const before = t;
-      for (let k = 0; k < this.calendarCount; k += 1) t = nextStretch(this.calendars[k] as Calendar, t, ask.minutes);
-      if (t >= NEVER || t > ask.lastStart) return false;
-      const booked = this.bookingOver(ask, t, t + ask.minutes);
-      if (booked > t) t = booked;
-      settled = t === before;
-    }
-    this.from = t;
-    this.until = t + ask.minutes;
-    pushSpan(out, t, this.until);
-    return true;
-  }
-
-  /** The end of the longest-lasting booking of the crew that meets a stretch; -1 where none does. */
-  private bookingOver(ask: Ask, start: number, end: number): number {
-    if (!ask.crew || this.leniency === 'other-work' || this.leniency === 'calendars') return -1;
-    const { makers } = ask.crew;
-    let until = -1;
-    for (let k = 0; k < makers.length; k += 1) {
-      const bookings = this.layout.bookings[makers[k]];
-      const i = bookings.indexAt(start);
-      if (i < bookings.count && bookings.starts[i] < end && bookings.ends[i] > until) until = bookings.ends[i];
-    }
-    return until;
-  }
-
-  private buildShifts(ask: Ask, from: number, out: Fit): boolean {
-    let at = from;
-    let left = ask.minutes;
-    while (left > 0) {
-      const start = this.nextTogether(at);
-      if (start >= NEVER || (left === ask.minutes && start > ask.lastStart)) return false;
-      const end = Math.min(this.togetherUntil(start), start + left);
-      const booked = this.bookingOver(ask, start, end);
-      if (booked >= 0) {
-        // A shift is not left half way: the whole stage begins after what it met.
-        out.spanCount = 0;
-        left = ask.minutes;
-        at = booked;
-        continue;
-      }
-      pushSpan(out, start, end);
-      left -= end - start;
-      at = end;
-    }
-    this.from = out.spans[0];
-    this.until = at;
-    return true;
-  }
-
-  private buildFree(ask: Ask, from: number, out: Fit): boolean {
-    let at = from;
-    let left = ask.minutes;
-    while (left > 0) {
-      const start = this.nextTogether(at);
-      if (start >= NEVER || (left === ask.minutes && start > ask.lastStart)) return false;
-      let end = Math.min(this.togetherUntil(start), start + left);
-      const booked = this.bookingOver(ask, start, end);
-      if (booked >= 0) end = Math.min(end, this.firstBookingStart(ask, start));
-      if (end - start < Math.min(left, LEAST_PIECE)) {
-        at = booked >= 0 && end <= start ? booked : Math.max(end, start + 1);
-        continue;
-      }
-      pushSpan(out, start, end);
-      left -= end - start;
-      at = end;
-    }
-    this.from = out.spans[0];
-    this.until = at;
-    return true;
-  }
-
-  private firstBookingStart(ask: Ask, from: number): number {
-    let first = NEVER;
-    if (ask.crew)
-      for (const maker of ask.crew.makers) first = Math.min(first, this.layout.bookings[maker].nextStart(from));
-    return first;
-  }
-
-  /** The first minute from `t` on that lies in every calendar. */
-  private nextTogether(t: number): number {
-    let at = t;
-    for (let k = 0, agreed = 0; agreed < this.calendarCount; k = (k + 1) % this.calendarCount) {
-      const calendar = this.calendars[k] as Calendar;
-      const i = calendar.indexAt(at);
-      if (i >= calendar.count) return NEVER;
-      if (calendar.starts[i] > at) {
-        at = calendar.starts[i];
-        agreed = 1;
-      } else agreed += 1;
-    }
-    return at;
-  }
-
-  /** How long every calendar lasts from a minute that lies in all of them. */
-  private togetherUntil(at: number): number {
-    let end = NEVER;
-    for (let k = 0; k < this.calendarCount; k += 1) {
-      const calendar = this.calendars[k] as Calendar;
-      end = Math.min(end, calendar.ends[calendar.indexAt(at)]);
-    }
-    return end;
-  }
-}
-
-/** The first start from `t` on with `minutes` inside one stretch of a calendar; NEVER where there is none. */
-function nextStretch(calendar: Calendar, t: number, minutes: number): number {
-  for (let i = calendar.indexAt(t); i < calendar.count; i += 1) {
-    const start = calendar.starts[i] > t ? calendar.starts[i] : t;
-    if (calendar.ends[i] - start >= minutes) return start;
-  }
-  return NEVER;
 }

@@ -158,6 +158,8 @@ interface Wish {
   readonly overtime: boolean;
 }
 
+const ANY_END = { lowEnd: -NEVER, lowFinish: -NEVER } as const;
+
 function bestFit(
   compiled: Compiled,
   fitter: Fitter,
@@ -171,7 +173,7 @@ function bestFit(
   for (const housing of housings) {
     for (const crew of crews.length > 0 ? crews : [null]) {
       const minutes = workMinutes(compiled, wish.stage, wish.effort, crew);
-      const ask: Ask = { ...wish, crew, housing, minutes, lowStart: wish.start, lowEnd: -NEVER, lowFinish: -NEVER };
+      const ask: Ask = { ...wish, crew, housing, minutes, lowStart: wish.start, lastEnd: NEVER, ...ANY_END };
       if (!fitter.fit(ask, trial) || (best && trial.finish >= best.fit.finish)) continue;
       best = { fit: newFit(), crew, housing };
       copyFit(trial, best.fit);

@@ -1,6 +1,8 @@
 import { StageBounds, isMovable, NOBODY } from './bounds-of-stage';
 import { NEVER } from './calendar';
 import type { Compiled, Crew } from './compiled';
+import { CrewBounds } from './crew-bounds';
+import { leastDwell } from './cured-by';
 import { placeFixed } from './fixed-stages';
 import { type Ask, Fitter } from './fitter';
 import type { Genome } from './genome';
@@ -9,6 +11,8 @@ import { workMinutes } from './work-minutes';
 
 /** Stages laid out between two looks at whether to give up. */
 const STAGES_BETWEEN_LOOKS = 64;
+/** So few crews are fitted one after another: to bound them would cost more. */
+const FEW_CREWS = 4;
 /** A maximum gap is mended this often for one stage before it is let go. */
 const MOST_MENDS_OF_STAGE = 8;
 
@@ -19,8 +23,10 @@ const MOST_MENDS_OF_STAGE = 8;
  */
 export class Generator {
   readonly layout: Layout;
-  /** Requirements that the last decoding could not meet, stages without a place among them. */
+  /** Requirements of movable stages that what is laid out does not meet, stages without a place among them. */
   broken = 0;
+  /** Stages laid out so far, those that were taken out again and again among them: what decoding has cost. */
+  laid = 0;
   /** Whether the last decoding was given up half way; its layout is then worth nothing. */
   isGivenUp = false;
   /** Asked now and then within a decoding, so that a large one need not be waited for. */
@@ -28,6 +34,7 @@ export class Generator {
 
   private readonly fitter: Fitter;
   private readonly bounds: StageBounds;
+  private readonly crewBounds: CrewBounds;
   private readonly ask: Ask = {
     stage: 0,
     crew: null,
@@ -37,10 +44,16 @@ export class Generator {
     lowEnd: 0,
     lowFinish: 0,
     lastStart: NEVER,
+    lastEnd: NEVER,
     overtime: false,
   };
   private readonly trial: Fit = newFit();
   private readonly best: Fit = newFit();
+  private leastDwell = 0;
+  private bestLate = NEVER;
+  private bestScore = NEVER;
+  private bestRegret = 0;
+  private bestRank = 0;
   private bestCrew: Crew | null = null;
   private bestHousing: Int32Array | null = null;
   private readonly floor: Int32Array;
@@ -49,6 +62,8 @@ export class Generator {
   /** Stages tried and found to have no place; they are not tried again in one decoding unless something is mended. */
   private readonly isHopeless: Uint8Array;
   private readonly position: Int32Array;
+  /** For each stage, the requirements that its placement broke when it was laid. */
+  private readonly brokenBy: Uint8Array;
   private mendsLeft = 0;
   private resumeAt = NEVER;
   private genome: Genome | null = null;
@@ -58,11 +73,13 @@ export class Generator {
     this.layout = new Layout(compiled);
     this.fitter = new Fitter(this.layout);
     this.bounds = new StageBounds(this.layout, this.fitter);
+    this.crewBounds = new CrewBounds(this.layout);
     this.floor = new Int32Array(n);
     this.mends = new Uint8Array(n);
     this.isBusy = new Uint8Array(n);
     this.isHopeless = new Uint8Array(n);
     this.position = new Int32Array(n);
+    this.brokenBy = new Uint8Array(n);
   }
 
   /** Lays out every stage, those that are tied first and the others by the genome's order. */
@@ -74,8 +91,21 @@ export class Generator {
   /** An empty layout but for the stages that are tied to their times. */
   begin(): void {
     this.layout.clear();
-    this.broken = 0;
+    this.brokenBy.fill(0);
     placeFixed(this.layout, this.fitter, this.bounds);
+  }
+
+  /** Becomes a copy of another generator's last decoding. */
+  copyFrom(other: Generator): void {
+    this.layout.copyFrom(other.layout);
+    this.brokenBy.set(other.brokenBy);
+    this.broken = other.broken;
+  }
+
+  /** Takes some movable stages out and lays them out again beside everything else, by the genome's order. */
+  relay(stages: readonly number[], genome: Genome): void {
+    for (const stage of stages) if (this.layout.isPlaced[stage] === 1) this.layout.unplace(stage);
+    this.resume(genome);
   }
 
   /** Lays out every stage that has no place yet by the genome's order, beside what is there. */
@@ -101,7 +131,8 @@ export class Generator {
       // A mend has taken stages out: go back to the first of them. The loop's own step makes up for the one subtracted.
       if (this.resumeAt < NEVER) p = Math.min(p, this.resumeAt) - 1;
     }
-    for (const stage of order) if (this.layout.isPlaced[stage] === 0) this.broken += 1;
+    this.broken = 0;
+    for (const stage of order) this.broken += this.layout.isPlaced[stage] === 0 ? 1 : this.brokenBy[stage];
   }
 
   /** Places a stage after the stages that it waits for. */
@@ -137,7 +168,9 @@ export class Generator {
       return;
     }
     if (late > 0 && this.mend(stage)) return;
-    if (late > 0) this.broken += this.bounds.countBroken(stage, this.best.start, this.best.end, this.best.finish);
+    const { start, end, finish } = this.best;
+    this.brokenBy[stage] = late > 0 ? this.bounds.countBroken(stage, start, end, finish) : 0;
+    this.laid += 1;
     this.layout.place(stage, this.best, this.bestCrew, this.bestHousing);
   }
 
@@ -170,49 +203,77 @@ export class Generator {
     ask.stage = stage;
     ask.overtime = this.genome !== null && this.genome.overtime[stage] === 1;
     if (needsCrew && crews.length === 0) return -1;
-    let bestLate = NEVER;
-    let bestScore = NEVER;
-    const fewest = this.fewestMinutes(stage, crews);
+    const fewest = this.crewBounds.measure(stage, crews);
     const { lowStart } = this.bounds;
+    this.bestLate = NEVER;
+    this.bestScore = NEVER;
+    this.bestHousing = null;
     for (const housing of work.housings[stage]) {
       ask.housing = housing;
+      this.leastDwell = leastDwell(this.compiled, stage, housing);
       // No crew can start before its bays have room for even the quickest work.
-      this.bounds.lowStart = this.fitter.bayFreeFrom(stage, housing, fewest, lowStart);
-      for (let c = 0; c < Math.max(1, crews.length); c += 1) {
-        if (choice >= 0 && c !== choice && choice < crews.length) continue;
-        const crew = c < crews.length ? crews[c] : null;
-        ask.crew = crew;
-        const least = workMinutes(this.compiled, stage, work.minutes[stage], crew);
-        // A start from which even bare work ends no better than the best found is of no use.
-        ask.lastStart = bestLate === 0 ? bestScore - least - regretMinutes(crew, least) - 1 : NEVER;
-        if (ask.lastStart < this.bounds.lowStart || !this.fitInTime(ask)) continue;
-        const late = this.lateness(this.trial);
-        const score = this.trial.finish + regretMinutes(crew, ask.minutes);
-        if (late > bestLate || (late === bestLate && score >= bestScore)) continue;
-        bestLate = late;
-        bestScore = score;
-        copyFit(this.trial, this.best);
-        this.bestCrew = crew;
-        this.bestHousing = housing;
-      }
+      this.bounds.lowStart = this.fitter.bayFreeFrom(ask, fewest, this.leastDwell, lowStart);
+      if (crews.length === 0) this.weigh(ask, null, 0, this.bounds.lowStart, fewest);
+      else if (choice >= 0 && choice < crews.length)
+        this.weigh(ask, crews[choice], choice, this.bounds.lowStart, this.crewBounds.minutes[choice]);
+      else if (crews.length <= FEW_CREWS)
+        for (let c = 0; c < crews.length; c += 1)
+          this.weigh(ask, crews[c], c, this.bounds.lowStart, this.crewBounds.minutes[c]);
+      else this.weighCrews(ask, crews);
     }
     this.bounds.lowStart = lowStart;
-    return bestScore >= NEVER ? -1 : bestLate;
+    return this.bestScore >= NEVER ? -1 : this.bestLate;
   }
 
-  private fewestMinutes(stage: number, crews: readonly Crew[]): number {
-    const effort = this.compiled.work.minutes[stage];
-    let fewest = crews.length === 0 ? effort : NEVER;
-    for (let c = 0; c < crews.length; c += 1)
-      fewest = Math.min(fewest, workMinutes(this.compiled, stage, effort, crews[c]));
-    return fewest;
+  /** Weighs crews, whichever could be done first at the very best first, until no other can be better. */
+  private weighCrews(ask: Ask, crews: readonly Crew[]): void {
+    const { crewBounds } = this;
+    crewBounds.bound(ask.stage, crews, this.bounds.lowStart, ask.overtime);
+    const { start, end, minutes } = crewBounds;
+    for (let c = 0; c < crews.length; c += 1) if (end[c] < NEVER) end[c] += regretMinutes(crews[c], minutes[c]);
+    for (let weighed = 0; weighed < crews.length; weighed += 1) {
+      let next = 0;
+      for (let c = 1; c < crews.length; c += 1) if (end[c] < end[next]) next = c;
+      if (end[next] >= NEVER || (this.bestLate === 0 && end[next] + this.leastDwell > this.bestScore)) return;
+      end[next] = NEVER;
+      this.weigh(ask, crews[next], next, start[next], minutes[next]);
+    }
+  }
+
+  /**
+   * Fits a crew from an instant on and keeps it where it is the best so far, or as good and listed sooner for the same bays;
+   * `least` is its bare work in minutes.
+   */
+  private weigh(ask: Ask, crew: Crew | null, rank: number, from: number, least: number): void {
+    ask.crew = crew;
+    // What would end, with its dwell and regret, no better than the best found is of no use.
+    const regret = regretMinutes(crew, least);
+    const isSooner = this.bestHousing === ask.housing && rank < this.bestRank;
+    const gain = isSooner ? 0 : 1;
+    ask.lastEnd = this.bestLate === 0 ? this.bestScore - this.leastDwell - regret - gain : NEVER;
+    // In the same bays who ends later has dwelt later too.
+    const isAlike = this.bestLate === 0 && this.bestHousing === ask.housing && regret >= this.bestRegret;
+    if (isAlike) ask.lastEnd = Math.min(ask.lastEnd, this.best.end - gain);
+    ask.lastStart = this.bestLate === 0 ? ask.lastEnd - least : NEVER;
+    ask.lowStart = from;
+    if (ask.lastStart < from || !this.fitInTime(ask)) return;
+    const late = this.lateness(this.trial);
+    const paid = regretMinutes(crew, ask.minutes);
+    const score = this.trial.finish + paid;
+    if (late > this.bestLate || (late === this.bestLate && score > this.bestScore - gain)) return;
+    this.bestLate = late;
+    this.bestScore = score;
+    this.bestRegret = paid;
+    this.bestRank = rank;
+    copyFit(this.trial, this.best);
+    this.bestCrew = crew;
+    this.bestHousing = ask.housing;
   }
 
   /** Fits with the extra effort of every soft window that the start then misses. */
   private fitInTime(ask: Ask): boolean {
     const { bounds } = this;
     const effort = this.compiled.work.minutes[ask.stage];
-    ask.lowStart = bounds.lowStart;
     ask.lowEnd = bounds.lowEnd;
     ask.lowFinish = bounds.lowFinish;
     for (let extra = -1; ;) {

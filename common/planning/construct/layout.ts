@@ -66,8 +66,6 @@ export class Layout {
   readonly spanAt: Int32Array;
   readonly spanCount: Int32Array;
   spanPool = new Int32Array(1024);
-  /** Grows whenever something is taken out: while it stands still, bookings have only been added. Never 0. */
-  version = 1;
   private poolUsed = 0;
   /** How many spans each stage's part of the pool has room for since it was last cleared. */
   private readonly spanRoom: Int32Array;
@@ -100,9 +98,44 @@ export class Layout {
     for (const booking of this.bookings) booking.clear();
     for (const bay of this.bays) bay.clear();
     for (const holds of this.openHolds) if (holds.length > 0) holds.length = 0;
-    this.version += 1;
     this.poolUsed = 0;
     this.spanRoom.fill(0);
+  }
+
+  /** Becomes a copy of another layout of the same compiled problem. */
+  copyFrom(other: Layout): void {
+    this.isPlaced.set(other.isPlaced);
+    this.start.set(other.start);
+    this.end.set(other.end);
+    this.finish.set(other.finish);
+    this.heldUntil.set(other.heldUntil);
+    this.copySpans(other);
+    for (let stage = 0; stage < this.crew.length; stage += 1) {
+      this.crew[stage] = other.crew[stage];
+      this.housing[stage] = other.housing[stage];
+    }
+    this.bookings.forEach((bookings, maker) => bookings.copyFrom(other.bookings[maker]));
+    this.bays.forEach((bay, k) => bay.copyFrom(other.bays[k]));
+    this.openHolds.forEach((holds, bay) => {
+      holds.length = 0;
+      holds.push(...other.openHolds[bay]);
+    });
+  }
+
+  /** Copies spans close together, so that room lost to stages that have moved on is not carried along. */
+  private copySpans(other: Layout): void {
+    if (this.spanPool.length < other.poolUsed) this.spanPool = new Int32Array(other.spanPool.length);
+    let used = 0;
+    for (let stage = 0; stage < this.spanAt.length; stage += 1) {
+      const count = other.isPlaced[stage] === 1 ? other.spanCount[stage] : 0;
+      const from = other.spanAt[stage];
+      for (let k = 0; k < 2 * count; k += 1) this.spanPool[used + k] = other.spanPool[from + k];
+      this.spanAt[stage] = used;
+      this.spanCount[stage] = count;
+      this.spanRoom[stage] = count;
+      used += 2 * count;
+    }
+    this.poolUsed = used;
   }
 
   /** Lays a stage where a fit says, books its crew and takes its bays. */
@@ -124,7 +157,6 @@ export class Layout {
   unplace(stage: number): void {
     const crew = this.crew[stage];
     const housing = this.housing[stage];
-    this.version += 1;
     if (crew) this.unbook(stage, crew);
     if (housing) this.releaseBays(stage, housing);
     this.isPlaced[stage] = 0;

@@ -65,15 +65,15 @@ export const weightedDatesFirst: PriorityRule = (compiled, estimate) => {
   return estimate.latestStart.map((start, stage) => start - 1440 * Math.log2(1 + weight[stage]));
 };
 
-/** Every rule, the one that does best on the whole first. */
-export const PRIORITY_RULES: readonly PriorityRule[] = [
-  latestStartFirst,
-  latestFinishFirst,
-  weightedDatesFirst,
-  leastSlackFirst,
-  mostSuccessorsFirst,
-  greatestRankFirst,
-];
+/** Every rule by its name, the one that does best on the whole first. */
+export const PRIORITY_RULES = {
+  latestStart: latestStartFirst,
+  latestFinish: latestFinishFirst,
+  weightedDates: weightedDatesFirst,
+  leastSlack: leastSlackFirst,
+  mostSuccessors: mostSuccessorsFirst,
+  greatestRank: greatestRankFirst,
+} as const satisfies Readonly<Record<string, PriorityRule>>;
 
 /** Stages by a rule's keys; ties by the order in which they come topologically. */
 export function orderBy(keys: Float64Array, topological: Int32Array): Int32Array {

@@ -185,6 +185,8 @@ export class Replay {
         earliest: this.earliest,
         fixity: work.fixity.map((fixity) => (fixity === FIXED_START || fixity === FROZEN ? MOVABLE : fixity)),
         crews: work.crews.map((crews, stage) => withStandIns(planned.crew[stage], crews)),
+        // Absences only take time away; a crew put together by hand may have other hours than any other.
+        anyTime: (stage) => (planned.crew[stage]?.index === -1 ? null : work.anyTime(stage)),
         housings: work.housings.map((housings, stage) =>
           planned.housing[stage] ? [planned.housing[stage]] : housings,
         ),

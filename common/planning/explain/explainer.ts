@@ -157,6 +157,7 @@ export class Explainer {
       lowEnd: this.lowEndByLinks(stage),
       lowFinish: -NEVER,
       lastStart: NEVER,
+      lastEnd: NEVER,
     };
   }
 

@@ -160,6 +160,7 @@ class Evener {
       lowEnd: bounds.lowEnd,
       lowFinish: bounds.lowFinish,
       lastStart: bounds.highStart,
+      lastEnd: Math.min(bounds.highEnd, this.dateLimit[stage]),
     };
   }
 

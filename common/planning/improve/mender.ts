@@ -235,6 +235,7 @@ export class Mender {
       lowEnd: bounds.lowEnd,
       lowFinish: bounds.lowFinish,
       lastStart: NEVER,
+      lastEnd: NEVER,
     };
     for (let owed = -1; ;) {
       const minutes = this.minutesOwed(stage, crew, ask.lowStart);

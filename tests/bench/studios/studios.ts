@@ -16,7 +16,24 @@ const studios: Readonly<Record<string, (seed: number) => Problem>> = {
   '200': (seed) => randomStudio({ productions: 4, piecesPerProduction: 4, makers: 9, weeks: 20, seed, tricky: false }),
   '1500': (seed) =>
     randomStudio({ productions: 16, piecesPerProduction: 7, makers: 25, weeks: 52, seed, tricky: false }),
+  busy: (seed) => soonDue(randomStudio({ ...BUSY, weeks: 40, seed, tricky: false })),
 };
+
+/** About 1,500 stages; one long table and two spray booths are not enough for all that is asked of them. */
+const BUSY = { productions: 25, piecesPerProduction: 5, makers: 40 } as const;
+const DAY = 1440;
+/** The first date of the busy studio, and from one to the next, in days. */
+const [FIRST_DUE, DUE_EVERY] = [12, 2];
+
+/** A studio with more promised than it can keep: its dates follow one another by days, in the order of their ids. */
+function soonDue(problem: Problem): Problem {
+  const keyDates = problem.keyDates.map((date, k) => ({
+    ...date,
+    strength: 'wished' as const,
+    at: problem.horizon.start + (FIRST_DUE + k * DUE_EVERY) * DAY + 1020,
+  }));
+  return { ...problem, keyDates };
+}
 
 /** The names of all studios: the demo, and invented ones of about so many stages. */
 export const studioNames: readonly string[] = Object.keys(studios);

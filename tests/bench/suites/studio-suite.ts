@@ -1,9 +1,14 @@
 import { check } from '@common/planning/check/check';
 import { lowerBound } from '@common/planning/bounds/lower-bound';
+import { compile } from '@common/planning/construct/compile';
+import { estimate } from '@common/planning/construct/estimate';
+import { PRIORITY_RULES } from '@common/planning/construct/priority-rules';
+import { layOutInOrder } from '@common/planning/improve/lay-out-in-order';
 import { level } from '@common/planning/improve/level';
+import { measure } from '@common/planning/objective/objective';
 import type { Problem } from '@common/planning/problem/problem';
 import type { LevelResult, Objective } from '@common/planning/problem/result';
-import { levelOptions, startStopwatch, type Budget } from '../budget';
+import { levelOptions, startProcessorWatch, startStopwatch, type Budget } from '../budget';
 import { benchStudio, studioNames } from '../studios/studios';
 import { rounded, type Suite, type SuiteFigures, type SuiteOptions } from './suite';
 
@@ -30,6 +35,7 @@ export const studioSuite: Suite = {
 function measureStudio(problem: Problem, options: SuiteOptions): SuiteFigures {
   const budget: Budget = options.budget ?? { kind: 'seconds', seconds: 10 };
   const heard: Heard[] = [];
+  const processor = startProcessorWatch();
   const watch = startStopwatch();
   const result = level(problem, {
     ...levelOptions(budget, options.seed, watch),
@@ -39,6 +45,7 @@ function measureStudio(problem: Problem, options: SuiteOptions): SuiteFigures {
     },
   });
   const seconds = watch.seconds();
+  const cpuSeconds = processor.seconds();
   heard.push({ seconds, objective: result.objective });
   const boundWatch = startStopwatch();
   const bound = lowerBound(problem);
@@ -52,13 +59,40 @@ function measureStudio(problem: Problem, options: SuiteOptions): SuiteFigures {
     stages: problem.stages.length,
     makers: problem.makers.length,
     seconds: rounded(seconds),
+    cpuSeconds: rounded(cpuSeconds),
     firstValidSeconds: rounded(firstValid?.seconds ?? null),
     within1PercentSeconds: rounded(nearly?.seconds ?? null),
     boundSeconds: rounded(boundWatch.seconds()),
     ...partFigures(result, bound),
     schedulesPerSecond: rounded(result.schedules / seconds, 1),
     stop: result.stop,
+    ...ruleFigures(problem, latenessOf(result.objective)),
   };
+}
+
+/** Weighted minutes late of each priority rule's plan and of the levelled one, and by how many percent that beats the best of them. */
+function ruleFigures(problem: Problem, levelled: number): SuiteFigures {
+  const compiled = compile(problem);
+  const estimated = estimate(compiled);
+  const figures: Record<string, number | null> = {};
+  let best = Infinity;
+  for (const [name, rule] of Object.entries(PRIORITY_RULES)) {
+    const keys = rule(compiled, estimated);
+    const order = compiled.stages.map((_, stage) => stage).sort((a, b) => keys[a] - keys[b] || a - b);
+    const plan = layOutInOrder(
+      problem,
+      order.map((stage) => compiled.stages[stage].id),
+    );
+    const late = latenessOf(measure(problem, plan, []));
+    figures[`${name}Late`] = late;
+    best = Math.min(best, late);
+  }
+  const percentBetterThanRules = best > 0 ? rounded(100 * (1 - levelled / best), 1) : null;
+  return { ...figures, levelLate: levelled, percentBetterThanRules };
+}
+
+function latenessOf({ hardLateness, wishedLateness }: Objective): number {
+  return hardLateness + wishedLateness;
 }
 
 function partFigures(result: LevelResult, bound: LevelResult['bound']): SuiteFigures {
