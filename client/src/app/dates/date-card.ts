@@ -7,10 +7,13 @@ import { Moment } from '../ui/moment';
 import { minuteOf, sayDayAndTime } from '../ui/say-time';
 import { STUDIO_CLOCK } from '../ui/studio-clock';
 import { DateForecast } from './date-forecast';
+import { RescuePanel } from './rescues/rescue-panel';
 import { marginPlace, sayDateMargin, STATE_WORDS } from './say-date-state';
 
 /** Before the first stage of a chain comes into the window of the plan. */
 const LEAD_MINUTES = 12 * 60;
+/** From this chance of being missed on, what would save a date is offered. */
+const WORTH_SAVING = 0.05;
 /** Steps of a chain shown before one asks for all. */
 const STEPS_SHOWN = 7;
 
@@ -18,7 +21,7 @@ const STEPS_SHOWN = 7;
 @Component({
   selector: 'fettle-date-card',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [DateForecast, MarkChip, Moment, RouterLink],
+  imports: [DateForecast, MarkChip, Moment, RescuePanel, RouterLink],
   templateUrl: './date-card.html',
   styleUrl: './date-card.scss',
   host: { '[class]': "'state-' + risk().state" },
@@ -33,6 +36,7 @@ export class DateCard {
   readonly forecast = input<KeyDateForecastView | null>(null);
   readonly draws = input(0);
 
+  protected readonly isAtRisk = computed(() => (this.forecast()?.missChance ?? 0) > WORTH_SAVING);
   protected readonly production = computed(() => this.productions().get(this.risk().productionId));
   protected readonly name = computed(() => KEY_DATE_NAMES[this.risk().kind]);
   protected readonly word = computed(() => STATE_WORDS[this.risk().state]);

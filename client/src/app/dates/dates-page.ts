@@ -4,12 +4,13 @@ import { onLiveEvent, readEndpoint } from '../api';
 import { PageHeading } from '../ui/page-heading';
 import { StatePanel } from '../ui/state-panel';
 import { DateCard } from './date-card';
+import { MeasuresBoard } from './rescues/measures-board';
 
 /** Every key date ahead: its margin, how it stands, and what leads to it. */
 @Component({
   selector: 'fettle-dates-page',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [DateCard, PageHeading, StatePanel],
+  imports: [DateCard, MeasuresBoard, PageHeading, StatePanel],
   template: `
     <div class="page">
       <fettle-page-heading title="Dates" [lead]="lead()" />
@@ -32,6 +33,7 @@ import { DateCard } from './date-card';
             }
           }
         </p>
+        <fettle-measures-board />
         <div class="cards">
           @for (risk of dates.value(); track risk.keyDateId) {
             <fettle-date-card

@@ -4,13 +4,14 @@ import { AccountsBoard } from './accounts-board';
 import { ClosuresBoard } from './closures-board';
 import { ForecastBoard } from './forecast-board';
 import { FeedsBoard } from './feeds-board';
+import { RescueBoard } from './rescue-board';
 import { StudioBoard } from './studio-board';
 
 /** What holds for the whole studio: its name and zone, limits and weights, closures, who may sign in, calendar addresses. */
 @Component({
   selector: 'fettle-settings-page',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [AccountsBoard, ClosuresBoard, FeedsBoard, ForecastBoard, PageHeading, StudioBoard],
+  imports: [AccountsBoard, ClosuresBoard, FeedsBoard, ForecastBoard, RescueBoard, PageHeading, StudioBoard],
   template: `
     <div class="page">
       <fettle-page-heading title="Settings" lead="What holds for the whole studio." />
@@ -18,6 +19,7 @@ import { StudioBoard } from './studio-board';
         <div class="stack">
           <fettle-studio-board />
           <fettle-forecast-board />
+          <fettle-rescue-board />
         </div>
         <div class="stack">
           <fettle-closures-board />
