@@ -2,13 +2,16 @@ import { z } from 'zod';
 import { endpoint, OFFICE } from './endpoint';
 import { Day, Id, Instant, MinuteStamp } from './primitives';
 
+/** Under so many draws a forecast is not shown: its chances would be worth little. */
+export const LEAST_DRAWS = 100;
+
 /**
  * What is believed of the studio's times where nobody gave three points; see docs/planning.md, "Forecast". Shares are per mille
  * of what was planned.
  */
 export const ForecastSettings = z.object({
   /** How many times the plan is lived through. */
-  draws: z.int().min(100, 'Under 100 draws the chances are worth little.').max(5000),
+  draws: z.int().min(LEAST_DRAWS, 'Under 100 draws the chances are worth little.').max(5000),
   /** `past-hours` lets finished work move the spread of the hours to come; `estimates` believes estimates as they stand. */
   learning: z.enum(['past-hours', 'estimates']),
   dwellLowPermille: z.int().min(100).max(1000, 'The shortest dwell can’t be longer than the likely one.'),
@@ -51,9 +54,16 @@ export const ForecastView = z.object({
   revision: z.int(),
   madeAt: Instant,
   draws: z.int(),
+  /** As many as the settings ask for; more than `draws` where it was stopped. */
+  drawsAsked: z.int(),
   seed: z.int(),
   /** How the studio runs against its estimates, as it is believed: the middle, per mille, and how many finished stages say so. */
-  overrun: z.object({ middlePermille: z.int(), spreadPermille: z.int(), pastStages: z.int() }),
+  overrun: z.object({
+    learning: ForecastSettings.shape.learning,
+    middlePermille: z.int(),
+    spreadPermille: z.int(),
+    pastStages: z.int(),
+  }),
   keyDates: z.array(KeyDateForecastView),
   productions: z.array(z.object({ productionId: Id, fan: Fan })),
   stages: z.array(Spread.extend({ stageId: Id })),
@@ -80,6 +90,12 @@ export const forecastEndpoints = {
     who: OFFICE,
     summary: 'The spread of every finish and the chance of missing each key date, by simulation of the working plan',
     response: ForecastView,
+  }),
+  stopForecast: endpoint({
+    method: 'POST',
+    path: '/api/forecast/stop',
+    who: OFFICE,
+    summary: 'Stop the forecast that is under way; whoever waits for it is answered from the draws made so far',
   }),
   readPastHours: endpoint({
     method: 'GET',

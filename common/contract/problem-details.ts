@@ -18,6 +18,7 @@ export const PROBLEM_KINDS = {
   'plan-stale': { status: 409, title: 'The plan no longer answers the studio as it is' },
   'plan-unsound': { status: 422, title: 'The plan breaks a rule and can not be issued' },
   'level-running': { status: 409, title: 'A levelling is already running' },
+  'forecast-stopped': { status: 409, title: 'The forecast was stopped' },
   'too-large': { status: 413, title: 'That is too much at once' },
   'unsupported-media': { status: 415, title: 'Send JSON' },
   'too-many-attempts': { status: 429, title: 'Too many attempts; wait a little' },

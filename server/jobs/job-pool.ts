@@ -4,9 +4,16 @@ import { join } from 'node:path';
 import { Worker } from 'node:worker_threads';
 import { PROTOCOL, type JobMessage, type JobName, type Jobs, type WorkerMessage } from './job-message';
 
-/** How a job came out; a crash is an outcome too. */
+/** How a job came out; a crash is an outcome too. `stopped`: cancelled before any worker had begun on it. */
 export type JobOutcome<N extends JobName> =
-  { readonly kind: 'found'; readonly found: Jobs[N]['found'] } | { readonly kind: 'failed'; readonly failure: string };
+  | { readonly kind: 'found'; readonly found: Jobs[N]['found'] }
+  | { readonly kind: 'failed'; readonly failure: string }
+  | { readonly kind: 'stopped' };
+
+/** What is said of a job that came to nothing. */
+export function failureOf(outcome: Exclude<JobOutcome<JobName>, { kind: 'found' }>): string {
+  return outcome.kind === 'stopped' ? 'It was stopped before it began.' : outcome.failure;
+}
 
 /** A job under way. */
 export interface RunningJob<N extends JobName> {
@@ -28,8 +35,6 @@ interface Seat {
   readonly onStart: () => void;
   readonly settle: (outcome: JobOutcome<JobName>) => void;
 }
-
-const CANCELLED_WHILE_WAITING: JobOutcome<JobName> = { kind: 'failed', failure: 'It was stopped before it began.' };
 
 /** At least two: a forecast need not wait for a levelling. */
 const LEAST_WORKERS = 2;
@@ -71,7 +76,7 @@ export class JobPool {
         const place = seat ? this.#waiting.indexOf(seat) : -1;
         if (place === -1) return;
         this.#waiting.splice(place, 1);
-        seat?.settle(CANCELLED_WHILE_WAITING);
+        seat?.settle({ kind: 'stopped' });
       },
     };
   }

@@ -64,7 +64,7 @@ export class LiveHub {
     return () => this.#gapListeners.delete(listener);
   }
 
-  /** Calls `listener` with the id of every levelling that some process was asked to cancel. */
+  /** Calls `listener` with whatever some process was asked to stop: the id of a levelling, or another word. */
   onCancel(listener: (runId: string) => void): void {
     this.#cancelListeners.add(listener);
   }

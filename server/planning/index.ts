@@ -1,6 +1,7 @@
 /** The public file of planning: the working plan, levelling, issuing, dates and load. */
 import type { Transactions } from '../storage/transactions';
 import type { JobPool } from '../jobs/job-pool';
+import type { LiveHub } from '../live';
 import { Dates } from './dates';
 import { Forecasts } from './forecast/forecasts';
 import { Issues } from './issues';
@@ -25,10 +26,11 @@ export interface PlanningNeeds {
   readonly levelRuns: LevelRuns;
   readonly searchRuns: SearchRuns;
   readonly jobPool: JobPool;
+  readonly live: LiveHub;
 }
 
 /** Everything that the routes of planning work with. */
-export function createPlanningParts({ transactions, levelRuns, searchRuns, jobPool }: PlanningNeeds): PlanningParts {
+export function createPlanningParts({ transactions, levelRuns, searchRuns, jobPool, live }: PlanningNeeds): PlanningParts {
   return {
     workingPlan: new WorkingPlan(transactions),
     revisions: new Revisions(transactions),
@@ -39,6 +41,6 @@ export function createPlanningParts({ transactions, levelRuns, searchRuns, jobPo
     loads: new Loads(transactions),
     promises: new Promises(transactions, searchRuns),
     rescues: new Rescues(transactions, searchRuns),
-    forecasts: new Forecasts(transactions, jobPool),
+    forecasts: new Forecasts(transactions, jobPool, live),
   };
 }

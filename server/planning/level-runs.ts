@@ -6,7 +6,7 @@ import { takeInProgress } from '@common/planning';
 import { LevelRun } from '@database/entities';
 import { notFound, Problem } from '../http/problem';
 import type { Log } from '../http/log';
-import type { JobOutcome, JobPool, RunningJob } from '../jobs/job-pool';
+import { failureOf, type JobOutcome, type JobPool, type RunningJob } from '../jobs/job-pool';
 import type { LevelTask } from '../jobs/level-task';
 import type { LiveHub } from '../live';
 import type { Actor } from '../session';
@@ -215,7 +215,7 @@ async function fail(unit: Unit, run: LevelRun, failure: string): Promise<void> {
 }
 
 function changeOf(outcome: JobOutcome<'level'>): Partial<LevelRun> {
-  if (outcome.kind === 'failed') return { state: 'failed', failure: outcome.failure };
+  if (outcome.kind !== 'found') return { state: 'failed', failure: failureOf(outcome) };
   const { result, endedBy } = outcome.found;
   const { plan, objective, bound, schedules, stop } = result;
   return {

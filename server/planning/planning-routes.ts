@@ -44,6 +44,7 @@ export function mountPlanning(api: Api, parts: PlanningParts): void {
   api.on(endpoints.listIssued, () => issues.list());
   api.on(endpoints.readDates, () => dates.read());
   api.on(endpoints.readForecast, () => forecasts.read());
+  api.on(endpoints.stopForecast, () => forecasts.stop());
   api.on(endpoints.readPastHours, () => forecasts.pastHours());
   api.on(endpoints.readLoad, ({ query }) => loads.read(query.by));
   mountSearches(api, parts);

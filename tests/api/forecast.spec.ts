@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { DateForecast } from '@database/entities';
 import { ForecastView, PastHoursView, StudioView, WorkingPlanView } from '@common/contract';
-import { withStudio } from './studio';
+import { eventually, withStudio, type Answer } from './studio';
 import { addProduction, furnish, stageOf, type Workshop } from './workshop';
 
 describe('the forecast', () => {
@@ -98,5 +98,34 @@ describe('the forecast', () => {
       const { overrun } = ForecastView.parse((await manager.get('/api/forecast')).body);
       expect(overrun).toMatchObject({ pastStages: 1, middlePermille: after.learnt.middlePermille });
     });
+  });
+});
+
+describe('a forecast that somebody stops', () => {
+  const studio = withStudio({ config: { engineWorkers: 1 } });
+
+  it('says so to whoever waits for it, and is made when it is asked for again', async () => {
+    const manager = await studio.as('manager');
+    const shop = await furnish(manager);
+    const { pieceId } = await addProduction(manager, shop.clientId, 'Plover');
+    for (let i = 0; i < 30; i += 1)
+      await manager.post(`/api/pieces/${pieceId}/stages`, stageOf(shop.craftId, `Coat ${i}`));
+    const { revision } = WorkingPlanView.parse((await manager.get('/api/plan')).body);
+    // The only worker is at something else, so that the forecast has to wait.
+    const run = await manager.post('/api/plan/level', { revision, mode: 'dates', seconds: 60, seed: 1 });
+    expect(run.status).toBe(202);
+    const settled: Answer[] = [];
+    void manager.get('/api/forecast').then((answer) => settled.push(answer));
+    await eventually(async () => {
+      expect((await manager.post('/api/forecast/stop')).status).toBe(204);
+      return settled.length > 0;
+    });
+    expect(settled[0].status).toBe(409);
+    expect(settled[0].body).toMatchObject({ type: '/problems/forecast-stopped' });
+    expect(settled[0].body.detail).toContain('before it had begun');
+    await manager.post(`/api/plan/level/${run.body.id}/cancel`);
+    const again = await manager.get('/api/forecast');
+    expect(again.status).toBe(200);
+    expect(ForecastView.parse(again.body)).toMatchObject({ draws: 1000, drawsAsked: 1000 });
   });
 });

@@ -1,12 +1,18 @@
-import type { Problem } from '@common/planning';
+import { NO_FACTOR } from '@common/forecast';
+import type { Plan, Problem } from '@common/planning';
 import { JobPool } from '../../server/jobs/job-pool';
 import { eventually, withStudio } from './studio';
 import { addProduction, furnish, stageOf } from './workshop';
 
-describe('a worker that levels', () => {
+interface Standing {
+  readonly problem: Problem;
+  readonly plan: Plan;
+}
+
+describe('a worker', () => {
   const studio = withStudio();
 
-  it('answers a cancel long before its time is up', async () => {
+  it('that levels answers a cancel long before its time is up', async () => {
     const manager = await studio.as('manager');
     const shop = await furnish(manager);
     const { pieceId } = await addProduction(manager, shop.clientId, 'Large');
@@ -22,6 +28,23 @@ describe('a worker that levels', () => {
     const outcome = await running.outcome;
     await pool.stop();
     expect(outcome).toMatchObject({ kind: 'found', found: { endedBy: 'cancel' } });
+  });
+
+  it('that forecasts answers a cancel with the draws made so far', async () => {
+    const { problem, plan } = (await (await studio.as('manager')).get('/api/plan')).body as Standing;
+    const pool = new JobPool(1);
+    const told: number[] = [];
+    const uncertainty = { stages: [], overrun: NO_FACTOR, curing: NO_FACTOR, absence: [] };
+    const task = { problem, plan, uncertainty, draws: 100_000, seed: 1, fanSteps: 41 };
+    const running = pool.run('forecast', task, { onProgress: ({ draws }) => told.push(draws) });
+    await eventually(() => told.length > 1);
+    running.cancel();
+    const outcome = await running.outcome;
+    await pool.stop();
+    if (outcome.kind !== 'found') throw new Error(`It came out as ${outcome.kind}.`);
+    expect(outcome.found.draws).toBeGreaterThanOrEqual(told[1]);
+    expect(outcome.found.draws).toBeLessThan(task.draws);
+    expect(outcome.found.stages).toHaveLength(plan.placements.length);
   });
 
   it('that crashes comes out as failed, and the next task gets another', async () => {

@@ -1,12 +1,15 @@
 import { createHash } from 'node:crypto';
-import { FAN_STEPS, type ForecastView, type PastHoursView } from '@common/contract';
+import { FAN_STEPS, LEAST_DRAWS, type ForecastView, type PastHoursView } from '@common/contract';
 import { learnOverrun, NO_FACTOR, type LogFactor } from '@common/forecast';
 import type { Names } from '@common/planning';
 import { buildUncertainty } from '@common/planning-input';
 import type { CalendarDay } from '@common/time/span';
 import { dayOfInstant } from '@common/time/calendar-day';
-import type { JobPool } from '../../jobs/job-pool';
+import type { JobPool, RunningJob } from '../../jobs/job-pool';
 import type { ForecastFound, ForecastTask } from '../../jobs/forecast-task';
+import { Problem } from '../../http/problem';
+import type { LiveHub } from '../../live';
+import { CANCEL_CHANNEL } from '../../storage/live-channel';
 import type { Transactions } from '../../storage/transactions';
 import { nameOfContent, readDesk, type Desk } from '../desk';
 import { DateForecastRepository, type EarlierForecast } from './date-forecast-repository';
@@ -24,6 +27,7 @@ interface Question {
   readonly name: string;
   readonly revision: number;
   readonly today: CalendarDay;
+  readonly learning: ForecastView['overrun']['learning'];
   readonly overrun: LogFactor;
   readonly pastStages: number;
   readonly earlier: readonly EarlierForecast[];
@@ -35,19 +39,37 @@ interface Answer {
   readonly madeAt: Date;
 }
 
+/** What is said on the cancelling channel to stop forecasts; levellings are named there by their ids. */
+const STOP_WORD = 'forecast';
+/** How often open pages are told how far it has come. */
+const TELL_EVERY_MS = 250;
+
 /** Forecasts of the working plan: made by a worker when somebody asks, and kept while the plan stands. */
 export class Forecasts {
   readonly #kept = new Map<string, Promise<Answer>>();
+  readonly #underWay = new Set<RunningJob<'forecast'>>();
 
   constructor(
     private readonly transactions: Transactions,
     private readonly pool: JobPool,
-  ) {}
+    live: LiveHub,
+  ) {
+    live.onCancel((word) => {
+      if (word === STOP_WORD) for (const running of this.#underWay) running.cancel();
+    });
+  }
 
   async read(): Promise<ForecastView> {
     const question = await this.#ask();
     const { found, madeAt } = await this.#answer(question);
     return viewOf(question, found, madeAt);
+  }
+
+  /** Stops what is under way, in whichever process; the draws made so far are answered with. */
+  async stop(): Promise<void> {
+    await this.transactions.write(null, (unit) =>
+      unit.manager.query('select pg_notify($1, $2)', [CANCEL_CHANNEL, STOP_WORD]),
+    );
   }
 
   pastHours(): Promise<PastHoursView> {
@@ -78,13 +100,36 @@ export class Forecasts {
     return answer;
   }
 
-  async #work({ task, today }: Question): Promise<Answer> {
-    const outcome = await this.pool.run('forecast', task).outcome;
+  async #work({ task, name, revision, today }: Question): Promise<Answer> {
+    let lastTold = Date.now();
+    const running = this.pool.run('forecast', task, {
+      onProgress: ({ draws }) => {
+        if (Date.now() - lastTold < TELL_EVERY_MS) return;
+        lastTold = Date.now();
+        const event = { kind: 'forecast', revision, draws, drawsAsked: task.draws } as const;
+        // Nobody is the worse for a word of progress that does not get through.
+        this.transactions.write(null, (unit) => unit.announce(event)).catch(() => undefined);
+      },
+    });
+    this.#underWay.add(running);
+    const outcome = await running.outcome.finally(() => this.#underWay.delete(running));
+    if (outcome.kind === 'stopped') throw stoppedAfter(0);
     if (outcome.kind === 'failed') throw new Error(`A forecast failed: ${outcome.failure}`);
     const { found } = outcome;
-    await this.transactions.write(null, (unit) => new DateForecastRepository(unit.manager).keep(today, found.keyDates));
+    if (found.draws < Math.min(LEAST_DRAWS, task.draws)) throw stoppedAfter(found.draws);
+    if (found.draws < task.draws) this.#kept.delete(name);
+    else {
+      await this.transactions.write(null, (unit) =>
+        new DateForecastRepository(unit.manager).keep(today, found.keyDates),
+      );
+    }
     return { found, madeAt: this.transactions.clock() };
   }
+}
+
+function stoppedAfter(draws: number): Problem {
+  const when = draws === 0 ? 'before it had begun' : `after ${String(draws)} draws, too few to go by`;
+  return new Problem('forecast-stopped', `It was stopped ${when}. Ask for it again.`);
 }
 
 function questionOf(
@@ -105,6 +150,7 @@ function questionOf(
     name: createHash('sha256').update(content).digest('base64url'),
     revision: planRevision,
     today,
+    learning: forecast.learning,
     overrun,
     pastStages: past.length,
     earlier,
@@ -124,7 +170,7 @@ function onlyWhollyPlaced({ problem, plan }: Desk): Desk['problem'] {
 }
 
 function viewOf(question: Question, found: ForecastFound, madeAt: Date): ForecastView {
-  const { revision, overrun, pastStages, names } = question;
+  const { revision, learning, overrun, pastStages, names } = question;
   const named = <T extends { readonly stageId: string }>(one: T): T & { readonly name: string } => ({
     ...one,
     name: names.stage(one.stageId),
@@ -134,8 +180,9 @@ function viewOf(question: Question, found: ForecastFound, madeAt: Date): Forecas
     revision,
     madeAt: madeAt.toISOString(),
     draws: found.draws,
+    drawsAsked: question.task.draws,
     seed: found.seed,
-    overrun: { ...sayFactor(overrun), pastStages },
+    overrun: { learning, ...sayFactor(overrun), pastStages },
     keyDates: found.keyDates.map(({ drivers, correlations, fan, ...keyDate }) => {
       const before = earlier.get(keyDate.keyDateId);
       return {

@@ -5,7 +5,7 @@ import { PlanSearch } from '@database/entities';
 import { notFound } from '../../http/problem';
 import type { Log } from '../../http/log';
 import type { Jobs } from '../../jobs/job-message';
-import type { JobPool, RunningJob } from '../../jobs/job-pool';
+import { failureOf, type JobPool, type RunningJob } from '../../jobs/job-pool';
 import type { LiveHub } from '../../live';
 import type { Actor } from '../../session';
 import { CANCEL_CHANNEL } from '../../storage/live-channel';
@@ -148,9 +148,9 @@ export class SearchRuns {
     });
     const written = running.outcome.then(async (outcome) => {
       const change =
-        outcome.kind === 'failed'
-          ? { state: 'failed' as const, failure: outcome.failure }
-          : { state: isCancelled ? ('cancelled' as const) : ('found' as const), found: outcome.found };
+        outcome.kind === 'found'
+          ? { state: isCancelled ? ('cancelled' as const) : ('found' as const), found: outcome.found }
+          : { state: 'failed' as const, failure: failureOf(outcome) };
       write({ ...change, endedAt: this.transactions.clock() });
       await writing;
       this.#working.delete(search.id);

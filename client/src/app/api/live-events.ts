@@ -15,7 +15,7 @@ const REOPEN_AFTER_MS = 5_000;
 /** `EventSource.CLOSED`, by value: a fake has no constants. */
 const CLOSED = 2;
 
-const KINDS = ['plan-revised', 'plan-issued', 'level', 'record-changed'] as const;
+const KINDS = ['plan-revised', 'plan-issued', 'level', 'forecast', 'record-changed'] as const;
 
 /** What happens in the studio while pages are open, as signals. A lost stream is opened again. */
 @Injectable({ providedIn: 'root' })

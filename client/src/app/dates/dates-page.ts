@@ -4,13 +4,14 @@ import { onLiveEvent, readEndpoint } from '../api';
 import { PageHeading } from '../ui/page-heading';
 import { StatePanel } from '../ui/state-panel';
 import { DateCard } from './date-card';
+import { ForecastBasis } from './forecast-basis';
 import { MeasuresBoard } from './rescues/measures-board';
 
 /** Every key date ahead: its margin, how it stands, and what leads to it. */
 @Component({
   selector: 'fettle-dates-page',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [DateCard, MeasuresBoard, PageHeading, StatePanel],
+  imports: [DateCard, ForecastBasis, MeasuresBoard, PageHeading, StatePanel],
   template: `
     <div class="page">
       <fettle-page-heading title="Dates" [lead]="lead()" />
@@ -19,20 +20,7 @@ import { MeasuresBoard } from './rescues/measures-board';
         emptyTitle="No key dates ahead"
         emptyHint="Give a production its delivery or its technical rehearsal, and it shows here with what leads to it."
       >
-        <p class="small quiet basis" role="status">
-          @switch (forecast.state()) {
-            @case ('loading') {
-              Living the plan through, to see what each date is worth…
-            }
-            @case ('failed') {
-              The chances can’t be told now: {{ forecast.failure()?.detail }}
-              <button class="plain" type="button" (click)="forecast.reload()">Try again</button>
-            }
-            @default {
-              {{ basis() }}
-            }
-          }
-        </p>
+        <fettle-forecast-basis [read]="forecast" />
         <fettle-measures-board />
         <div class="cards">
           @for (risk of dates.value(); track risk.keyDateId) {
@@ -48,9 +36,6 @@ import { MeasuresBoard } from './rescues/measures-board';
     </div>
   `,
   styles: `
-    .basis {
-      margin-bottom: var(--space-3);
-    }
     .cards {
       display: grid;
       gap: var(--space-4);
@@ -65,19 +50,6 @@ export class DatesPage {
   protected readonly forecasts = computed(
     () => new Map(this.forecast.value()?.keyDates.map((one) => [one.keyDateId, one])),
   );
-  /** Where the chances come from, and whether the plan has moved on since. */
-  protected readonly basis = computed(() => {
-    const forecast = this.forecast.value();
-    if (!forecast) return '';
-    const { draws, overrun } = forecast;
-    const from =
-      overrun.pastStages === 0
-        ? 'no finished work to learn from yet'
-        : `${overrun.pastStages} finished stages that say the studio takes ${(overrun.middlePermille / 10).toFixed(0)} % of its estimates`;
-    const stale =
-      this.forecast.state() === 'stale' ? ' The plan has changed since; it is being lived through again.' : '';
-    return `Chances are from ${draws.toLocaleString('en')} draws of the working plan, with ${from}.${stale}`;
-  });
   private readonly productions = readEndpoint(endpoints.listProductions);
   protected readonly byId = computed(() => new Map(this.productions.value()?.map((one) => [one.id, one])));
   protected readonly lead = computed(() => {

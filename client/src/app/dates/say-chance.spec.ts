@@ -1,4 +1,4 @@
-import { sayChance, sayChanceMoved } from './say-chance';
+import { sayBasis, sayChance, sayChanceMoved } from './say-chance';
 
 describe('a chance', () => {
   it('is told as far as the draws can tell it', () => {
@@ -13,5 +13,25 @@ describe('a chance', () => {
     expect(sayChanceMoved(0.3, 0.12, 'Mon 30 Nov')).toBe('up from 12 % on Mon 30 Nov');
     expect(sayChanceMoved(0.05, 0.12, 'Mon 30 Nov')).toBe('down from 12 % on Mon 30 Nov');
     expect(sayChanceMoved(0.121, 0.12, 'Mon 30 Nov')).toBe('as on Mon 30 Nov');
+  });
+});
+
+describe('what chances are from', () => {
+  const overrun = { learning: 'past-hours' as const, middlePermille: 1123, spreadPermille: 80, pastStages: 41 };
+
+  it('is told with what finished work says', () => {
+    expect(sayBasis({ draws: 1000, drawsAsked: 1000, overrun })).toBe(
+      'Chances are from living the plan through: 1,000 draws. 41 finished stages say that the studio needs 112 % of its estimates.',
+    );
+    expect(sayBasis({ draws: 1000, drawsAsked: 1000, overrun: { ...overrun, pastStages: 0 } })).toContain(
+      'No finished work to learn from yet: the studio is taken to need 112 % of its estimates.',
+    );
+    expect(sayBasis({ draws: 1000, drawsAsked: 1000, overrun: { ...overrun, learning: 'estimates' } })).toContain(
+      'Estimates are believed as they stand',
+    );
+  });
+
+  it('is told as cut short where it was', () => {
+    expect(sayBasis({ draws: 320, drawsAsked: 1000, overrun })).toContain('320 of 1,000 draws, for it was stopped.');
   });
 });
