@@ -11,19 +11,43 @@ export const LEAST_DRAWS = 100;
  */
 export const ForecastSettings = z.object({
   /** How many times the plan is lived through. */
-  draws: z.int().min(LEAST_DRAWS, 'Under 100 draws the chances are worth little.').max(5000),
+  draws: z
+    .int()
+    .min(LEAST_DRAWS, `Under ${LEAST_DRAWS} draws the chances are worth little.`)
+    .max(5000, 'More than 5,000 draws take long and tell hardly more.'),
   /** `past-hours` lets finished work move the spread of the hours to come; `estimates` believes estimates as they stand. */
   learning: z.enum(['past-hours', 'estimates']),
-  dwellLowPermille: z.int().min(100).max(1000, 'The shortest dwell can’t be longer than the likely one.'),
-  dwellHighPermille: z.int().min(1000, 'The longest dwell can’t be shorter than the likely one.').max(10_000),
-  replyLowPermille: z.int().min(0).max(1000, 'The soonest answer can’t come after the likely one.'),
-  replyHighPermille: z.int().min(1000, 'The latest answer can’t come before the likely one.').max(20_000),
+  dwellLowPermille: z
+    .int()
+    .min(100, 'No dwell is over in less than a tenth of the likely one.')
+    .max(1000, 'The shortest dwell can’t be longer than the likely one, 100 %.'),
+  dwellHighPermille: z
+    .int()
+    .min(1000, 'The longest dwell can’t be shorter than the likely one, 100 %.')
+    .max(10_000, 'Ten times the likely dwell is the most.'),
+  replyLowPermille: z
+    .int()
+    .min(0, 'An answer can’t come before it is asked for.')
+    .max(1000, 'The soonest answer can’t come after the likely one, 100 %.'),
+  replyHighPermille: z
+    .int()
+    .min(1000, 'The latest answer can’t come before the likely one, 100 %.')
+    .max(20_000, 'Twenty times the likely wait is the most.'),
   /** How late a delivery comes at the worst, per mille of its lead time. */
-  deliveryLatePermille: z.int().min(0).max(5000),
+  deliveryLatePermille: z
+    .int()
+    .min(0, 'Give how late a delivery may come: 0 % or more.')
+    .max(5000, 'Five times the lead time is the most.'),
   /** Chance that a maker is away on a day that they should be there. */
-  absencePermille: z.int().min(0).max(300, 'A chance above 30 % is leave: enter it as such.'),
+  absencePermille: z
+    .int()
+    .min(0, 'A chance is 0 % or more.')
+    .max(300, 'A chance above 30 % is leave: enter it as such.'),
   /** How much a warm or cold week moves all dwells at once: one standard deviation. */
-  climateSpreadPermille: z.int().min(0).max(500),
+  climateSpreadPermille: z
+    .int()
+    .min(0, 'A spread is 0 % or more.')
+    .max(500, 'Weather that moves dwells by more than half is for the rooms’ own climates.'),
 });
 export type ForecastSettings = z.infer<typeof ForecastSettings>;
 

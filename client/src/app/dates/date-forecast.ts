@@ -6,7 +6,7 @@ import { Plot } from '../ui/plot/plot';
 import { minuteOf } from '../ui/say-time';
 import { STUDIO_CLOCK } from '../ui/studio-clock';
 import { drawSpread } from './draw-spread';
-import { sayChance, sayChanceMoved } from './say-chance';
+import { judgeChance, sayChance, sayChanceMoved } from './say-chance';
 
 /** Every fifth of the fan's steps stands in the table: 0, 12.5, 25 … 100 per cent. */
 const TABLE_EVERY = 5;
@@ -29,6 +29,7 @@ export class DateForecast {
 
   protected readonly open = signal(false);
   protected readonly chance = computed(() => sayChance(this.forecast().missChance, this.draws()));
+  protected readonly judged = computed(() => judgeChance(this.forecast().missChance));
   protected readonly moved = computed(() => {
     const { earlier, missChance } = this.forecast();
     return earlier && sayChanceMoved(missChance, earlier.missChance, formatDay(earlier.day));

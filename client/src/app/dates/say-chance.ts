@@ -8,6 +8,16 @@ export function sayChance(share: number, draws: number): string {
   return `${percent < 9.95 || percent > 90.05 ? percent.toFixed(1) : percent.toFixed(0)} %`;
 }
 
+/** From a fifth on a chance of missing is said to be a risk, from a half on to be likelier than not. Common practice, no source. */
+const AT_RISK = 0.2;
+const LIKELIER = 0.5;
+
+/** What a chance of missing comes to in a word, with its tone; null where it needs none. */
+export function judgeChance(share: number): { readonly word: string; readonly tone: 'risk' | 'fault' } | null {
+  if (share >= LIKELIER) return { word: 'likelier missed than met', tone: 'fault' };
+  return share >= AT_RISK ? { word: 'at risk', tone: 'risk' } : null;
+}
+
 /** "up from 12 % on Mon 30 Nov", "as on Mon 30 Nov": how a chance has moved; whole per cents, for draws tell no finer over days. */
 export function sayChanceMoved(now: number, before: number, day: string): string {
   const [here, there] = [Math.round(now * 100), Math.round(before * 100)];
@@ -21,8 +31,9 @@ export function sayDraws({ draws, drawsAsked }: Pick<ForecastView, 'draws' | 'dr
 }
 
 /** Where the chances come from: how many draws, and what the studio's finished work says of its estimates. */
-export function sayBasis(forecast: Pick<ForecastView, 'draws' | 'drawsAsked' | 'overrun'>): string {
+export function sayBasis(forecast: Pick<ForecastView, 'draws' | 'drawsAsked' | 'overrun' | 'stages'>): string {
   const { draws, drawsAsked, overrun } = forecast;
+  if (forecast.stages.length === 0) return 'Nothing has a place in the plan yet; chances come with it.';
   const made = draws < drawsAsked ? `${sayDraws(forecast)}, for it was stopped` : `${draws.toLocaleString('en')} draws`;
   return `Chances are from living the plan through: ${made}. ${sayOverrun(overrun)}`;
 }

@@ -1,11 +1,12 @@
 import { ChangeDetectionStrategy, Component, effect, inject, signal, untracked } from '@angular/core';
 import { FormControl, FormGroup, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
-import { endpoints, type ForecastSettings, type StudioView } from '@common/contract';
+import { endpoints, ForecastSettings, type StudioView } from '@common/contract';
 import { Api, onLiveEvent, readEndpoint } from '../api';
 import { SessionStore } from '../session';
 import { ChoiceField } from '../ui/choice-field';
 import { VersionedWrites } from '../ui/conflict-dialog';
+import { keeps } from '../ui/field-errors';
 import { FigureField } from '../ui/figure-field';
 import { FormSave } from '../ui/form-save';
 import { Notice } from '../ui/notice';
@@ -14,8 +15,10 @@ import { StatePanel } from '../ui/state-panel';
 import { HoursPipe } from '../ui/time-pipes';
 import { Toasts } from '../ui/toasts';
 
-const figure = (least: number, most: number): FormControl<number | null> =>
-  new FormControl<number | null>(null, [Validators.required, Validators.min(least), Validators.max(most)]);
+type Figure = Exclude<keyof ForecastSettings, 'learning'>;
+
+const figure = (name: Figure): FormControl<number | null> =>
+  new FormControl<number | null>(null, [Validators.required, keeps(ForecastSettings.shape[name])]);
 
 /** How the forecast draws what nobody gave three points for, and what the studio's finished work has taught it. */
 @Component({
@@ -66,15 +69,15 @@ export class ForecastBoard {
     { name: 'climateSpreadPermille', label: 'A warm or cold week', hint: 'Moves all dwells at once.' },
   ] as const;
   protected readonly form = new FormGroup({
-    draws: figure(100, 5000),
+    draws: figure('draws'),
     learning: new FormControl<ForecastSettings['learning']>('past-hours', { nonNullable: true }),
-    dwellLowPermille: figure(100, 1000),
-    dwellHighPermille: figure(1000, 10_000),
-    replyLowPermille: figure(0, 1000),
-    replyHighPermille: figure(1000, 20_000),
-    deliveryLatePermille: figure(0, 5000),
-    absencePermille: figure(0, 300),
-    climateSpreadPermille: figure(0, 500),
+    dwellLowPermille: figure('dwellLowPermille'),
+    dwellHighPermille: figure('dwellHighPermille'),
+    replyLowPermille: figure('replyLowPermille'),
+    replyHighPermille: figure('replyHighPermille'),
+    deliveryLatePermille: figure('deliveryLatePermille'),
+    absencePermille: figure('absencePermille'),
+    climateSpreadPermille: figure('climateSpreadPermille'),
   });
 
   constructor() {

@@ -39,7 +39,9 @@ const TOKENS = ['ink', 'graphite', 'rule', 'gesso', 'silicone', 'oxide', 'verdig
   styles: `
     :host {
       display: block;
-      min-width: 0;
+      /* The picture is drawn as wide as its place, a moment after: until then it must not hold the place open. */
+      contain: inline-size;
+      overflow: clip;
     }
     .sheet {
       width: 100%;
