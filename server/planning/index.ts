@@ -30,7 +30,13 @@ export interface PlanningNeeds {
 }
 
 /** Everything that the routes of planning work with. */
-export function createPlanningParts({ transactions, levelRuns, searchRuns, jobPool, live }: PlanningNeeds): PlanningParts {
+export function createPlanningParts({
+  transactions,
+  levelRuns,
+  searchRuns,
+  jobPool,
+  live,
+}: PlanningNeeds): PlanningParts {
   return {
     workingPlan: new WorkingPlan(transactions),
     revisions: new Revisions(transactions),
