@@ -73,6 +73,7 @@ export class TimeDrawer {
   private drawStage(known: StageUncertainty, index: number, isFinished: boolean): StageDraws {
     const { replay } = this;
     const { stageId, effortMinutes, dwellMinutes, delayMinutes } = known;
+    const { stretchSdLog = 0 } = this.uncertainty.overrun;
     const plannedEffort = isFinished ? 0 : replay.effortMinutes[index];
     const plannedAge = replay.dwellAge[index];
     const hasEffort = plannedEffort > 0 && effortMinutes.likely > 0;
@@ -82,20 +83,23 @@ export class TimeDrawer {
       plannedEffort,
       plannedAge,
       plannedEarliest: replay.earliest[index],
-      effort: hasEffort ? this.drawQuantity(`effort ${stageId}`, effortMinutes) : null,
+      effort: hasEffort ? this.drawQuantity(`effort ${stageId}`, effortMinutes, stretchSdLog) : null,
       dwell: hasDwell ? this.drawQuantity(`dwell ${stageId}`, dwellMinutes) : null,
       delay: delayMinutes.high > 0 ? this.drawQuantity(`delay ${stageId}`, delayMinutes) : null,
     };
   }
 
-  private drawQuantity(name: string, estimate: ThreePoint): Drawn {
+  private drawQuantity(name: string, estimate: ThreePoint, stretchSdLog = 0): Drawn {
     const { draws } = this;
     const minutes = new Float64Array(draws).fill(estimate.likely);
     const { likely } = estimate;
     if (estimate.high <= estimate.low) return { ranks: this.certain, minutes, likely };
     const ranks = stratifiedRanks(this.seed, name, draws);
     const quantile = pertQuantiles(estimate);
-    for (let draw = 0; draw < draws; draw += 1) minutes[draw] = quantile(shareOfRank(ranks[draw], draws));
+    for (let draw = 0; draw < draws; draw += 1) {
+      const share = shareOfRank(ranks[draw], draws);
+      minutes[draw] = quantile(share) * (stretchSdLog === 0 ? 1 : Math.exp(stretchSdLog * normalQuantile(share)));
+    }
     return { ranks, minutes, likely };
   }
 

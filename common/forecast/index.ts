@@ -5,6 +5,6 @@ export type { FinishSpread, Forecast, ForecastOptions, KeyDateForecast } from '.
 export { learnOverrun, PRIOR_OVERRUN } from './learn-overrun';
 export type { PastStage } from './learn-overrun';
 export { NO_FACTOR } from './uncertainty';
-export type { LogFactor, StageUncertainty, Uncertainty } from './uncertainty';
+export type { LogFactor, Overrun, StageUncertainty, Uncertainty } from './uncertainty';
 export { betaPertMoments, betaPertShapes, exactly, pertMoments, triangularMoments } from './three-point';
 export type { Moments, ThreePoint } from './three-point';

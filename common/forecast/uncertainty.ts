@@ -7,7 +7,7 @@ import type { ThreePoint } from './three-point';
 export interface Uncertainty {
   readonly stages: readonly StageUncertainty[];
   /** How the studio's work runs against its estimates. */
-  readonly overrun: LogFactor;
+  readonly overrun: Overrun;
   /** How curing runs against the climate that was planned with; above 0 is slower. */
   readonly curing: LogFactor;
   /** Chance that a maker is away on a day that they should be there, from 0 to 1. */
@@ -29,6 +29,15 @@ export interface StageUncertainty {
 export interface LogFactor {
   readonly meanLog: number;
   readonly sdLog: number;
+}
+
+/** How work runs against its estimates: the factor that all of it shares, and by how much single stages scatter more than they say. */
+export interface Overrun extends LogFactor {
+  /**
+   * What a stage's own three points lack of its true spread, as a standard deviation of the logarithm, 0 or more; absent for none.
+   * Whoever writes down low and high seldom means the very least and the very most.
+   */
+  readonly stretchSdLog?: number;
 }
 
 /** A factor of exactly 1. */

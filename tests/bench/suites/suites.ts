@@ -1,3 +1,4 @@
+import { calibrationSuite } from './calibration-suite';
 import { dragSuite } from './drag-suite';
 import { forecastSuite } from './forecast-suite';
 import { instanceSuite } from './instance-suite';
@@ -47,4 +48,5 @@ export const suites: ReadonlyMap<string, Suite> = new Map<string, Suite>([
   ['studio', studioSuite],
   ['drag', dragSuite],
   ['forecast', forecastSuite],
+  ['calibration', calibrationSuite],
 ]);
