@@ -40,6 +40,8 @@ export interface Forecast {
 export interface ForecastOptions {
   readonly draws: number;
   readonly seed: number;
+  /** Stages that give way to all others in every draw; none where it is absent. */
+  readonly givesWay?: ReadonlySet<string>;
   /** Looked at between draws; true ends the forecast with the draws made so far (one at least). */
   readonly shouldStop?: () => boolean;
 }
@@ -53,7 +55,7 @@ const CORRELATION_WORTH_NAMING = 0.08;
  * common random numbers, so that two plans forecast with one seed differ by what differs in them.
  */
 export function forecast(problem: Problem, plan: Plan, uncertainty: Uncertainty, options: ForecastOptions): Forecast {
-  const replay = new Replay(problem, plan);
+  const replay = new Replay(problem, plan, options.givesWay);
   const drawer = new TimeDrawer(problem, uncertainty, replay, options.draws, options.seed);
   const tally = new Tally(problem, replay, options.draws);
   let made = 0;

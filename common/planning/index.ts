@@ -16,6 +16,8 @@ export { level } from './improve/level';
 export { levelWithinDates } from './improve/level-within-dates';
 export { replaceAfterMove } from './improve/replace-after-move';
 export { layOutInOrder, takeInProgress } from './improve/lay-out-in-order';
+export { layOutBeside } from './improve/lay-out-beside';
+export type { BesideOptions } from './improve/lay-out-beside';
 export type { LevelOptions } from './improve/level-options';
 export type { Move, MoveResult } from './improve/move';
 export { explain } from './explain/explain';

@@ -1,3 +1,4 @@
-/** The one public file of promises: when a production that is asked for could be ready, and what it would push. */
-export { findPromise } from './find-promise';
-export type { Promised, PromiseHooks, PromiseQuestion, PromiseWay, Pushed, ShortWeek } from './find-promise';
+/** The one public file of promises: when a production that is asked for could be delivered, and what it would push. */
+export { promise } from './promise';
+export type { Promised, PromiseOptions, PromiseStep, PromiseWay, PushedDate, WayOfLaying } from './promise';
+export type { ShortRow, Shortages } from './shortages';

@@ -58,7 +58,7 @@ function mountSearches(api: Api, { rescues, promises }: PlanningParts): void {
   api.on(endpoints.takeRescue, ({ actor, params, body }) => rescues.take(actor, params.id, body));
   api.on(endpoints.listMeasures, () => rescues.measures());
   api.on(endpoints.dropMeasure, ({ actor, body }) => rescues.drop(actor, body));
-  api.on(endpoints.startPromise, ({ actor, body }) => promises.start(actor, body.productionId));
+  api.on(endpoints.startPromise, ({ actor, body }) => promises.start(actor, body));
   api.on(endpoints.listPromises, () => promises.list());
   api.on(endpoints.readPromise, ({ params }) => promises.read(params.id));
   api.on(endpoints.cancelPromise, ({ params }) => promises.cancel(params.id));

@@ -1,4 +1,4 @@
-import { PromiseSearchView, RescueSearchView, TakenMeasure, WorkingPlanView } from '@common/contract';
+import { RescueSearchView, TakenMeasure, WorkingPlanView } from '@common/contract';
 import { withStudio, type Visitor } from './studio';
 import { addProduction, furnish, stageOf, type Workshop } from './workshop';
 
@@ -95,36 +95,6 @@ describe('searches about the working plan', () => {
     it('need a key date that is ahead', async () => {
       const unknown = await manager.post('/api/rescues', { keyDateId: shop.craftId });
       expect([unknown.status, unknown.body.detail]).toEqual([404, 'There is no such key date ahead.']);
-    });
-  });
-
-  describe('for a promise', () => {
-    it('say when an enquiry could be ready both ways, and leave the plan as it is', async () => {
-      const enquiry = await addProduction(manager, shop.clientId, 'Gull', [dateIn(40)], 'tentative');
-      await manager.post(`/api/pieces/${enquiry.pieceId}/stages`, stageOf(shop.craftId, 'Carve'));
-      const before = await plan();
-      const { id } = PromiseSearchView.parse(
-        (await manager.post('/api/promises', { productionId: enquiry.productionId })).body,
-      );
-      const found = await ended(`/api/promises/${id}`, (body) => PromiseSearchView.parse(body));
-      expect(found).toMatchObject({ state: 'found', stale: false });
-      expect(found.ways.map(({ way }) => way)).toEqual(['behind', 'among']);
-      for (const { p50, p80, p90, unplacedStages } of found.ways) {
-        expect([p50, p80, p90]).toEqual([p50, p80, p90].sort((a, b) => a - b));
-        expect(unplacedStages).toEqual([]);
-      }
-      expect(await plan()).toMatchObject({ revision: before.revision, plan: before.plan });
-      const list = PromiseSearchView.array().parse((await manager.get('/api/promises')).body);
-      expect(list.map(({ productionId }) => productionId)).toEqual([enquiry.productionId]);
-    });
-
-    it('need something to be made', async () => {
-      const empty = await addProduction(manager, shop.clientId, 'Tern', [], 'tentative');
-      const asked = await manager.post('/api/promises', { productionId: empty.productionId });
-      expect([asked.status, asked.body.detail]).toEqual([
-        422,
-        'It has no stages yet. Add its pieces from recipes, then ask again.',
-      ]);
     });
   });
 });

@@ -2,7 +2,6 @@ import { forecast, NO_FACTOR } from '@common/forecast';
 import { level, type Plan } from '@common/planning';
 import { buildProblem, buildUncertainty, USUAL_SPREADS } from '@common/planning-input';
 import { applyMeasures, FIRST_TERMS, priceOf, proposeMeasures, searchRescues, type Measure } from '@common/rescue';
-import { findPromise } from '@common/promise';
 import { buildDemoStudio } from '@database/demo/build-demo-studio';
 import { demoMorning, demoSnapshot } from '@database/demo/demo-problem';
 
@@ -60,20 +59,6 @@ describe('the demo’s date that can’t be met', () => {
   it('stops a search that is cancelled with what it has', () => {
     const found = searchRescues(question, { isCancelled: () => true, tell: () => undefined });
     expect(found.rescues.every(({ measures }) => measures.length === 0)).toBe(true);
-  });
-
-  it('is asked for by a promise that lays a production behind all others without moving them', () => {
-    const [{ id: productionId }] = snapshot.productions.filter(({ state }) => state !== 'delivered').slice(-1);
-    const told: number[] = [];
-    const ways = findPromise(
-      { snapshot, plan, now, productionId, spreads: USUAL_SPREADS, overrun: NO_FACTOR, draws: DRAWS, seed: SEED },
-      { isCancelled: () => false, tell: ({ weighed }) => told.push(weighed) },
-    );
-    expect(told).toEqual([1, 2]);
-    for (const { p50, p80, p90, planned } of ways) {
-      expect([p50, p80, p90]).toEqual([p50, p80, p90].sort((a, b) => a - b));
-      expect(planned).toBeGreaterThan(now);
-    }
   });
 
   function missChanceWith(measure: Measure): number {

@@ -17,6 +17,12 @@ const pages: Routes = [
   { path: 'dates', title: 'Dates', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./dates') },
   { path: 'load', title: 'Load', canActivate: [onlyFor(OFFICE)], loadChildren: () => import('./load') },
   {
+    path: 'enquiries',
+    title: 'Enquiries',
+    canActivate: [onlyFor(OFFICE)],
+    loadChildren: () => import('./enquiries'),
+  },
+  {
     path: 'productions',
     title: 'Productions',
     canActivate: [onlyFor(WORKSHOP)],

@@ -23,6 +23,8 @@ import { loadPlan } from './load-plan';
 /** No stage: nothing in the plan made it wait. */
 export const NO_DRIVER = -1;
 
+const NOTHING: ReadonlySet<string> = new Set();
+
 /** Not looked up yet since the last run. */
 const UNKNOWN = -2;
 
@@ -53,7 +55,8 @@ export class Replay {
   private readonly usersOfBay: readonly (readonly number[])[];
   private readonly drivers: Int32Array;
 
-  constructor(problem: Problem, plan: Plan) {
+  /** `givesWay`: stages that are laid out after all others, whenever they start. */
+  constructor(problem: Problem, plan: Plan, givesWay: ReadonlySet<string> = NOTHING) {
     const base = compile(problem);
     const planned = new Layout(base);
     loadPlan(planned, plan);
@@ -66,7 +69,7 @@ export class Replay {
     this.earliest = earliestOf(base);
     this.compiled = this.withPlanned(base, planned);
     this.generator = new Generator(this.compiled);
-    this.genome = genomeOfPlan(this.compiled, planned);
+    this.genome = genomeOfPlan(this.compiled, planned, givesWay);
     this.worksLonger = askedForOvertime(this.compiled, this.genome);
     this.drivers = new Int32Array(base.stageCount).fill(UNKNOWN);
     this.stageIds = base.stages.map((stage) => stage.id);
@@ -226,11 +229,14 @@ function earliestOf({ work }: Compiled): Int32Array {
 }
 
 /** The plan's own order of starts; stages without a place come last. Overtime stays where the plan works it. */
-function genomeOfPlan(compiled: Compiled, planned: Layout): Genome {
+function genomeOfPlan(compiled: Compiled, planned: Layout, givesWay: ReadonlySet<string>): Genome {
   const movable = compiled.stages.map((_, stage) => stage).filter((stage) => compiled.work.fixity[stage] === MOVABLE);
   const startOf = (stage: number): number =>
     planned.isPlaced[stage] === 1 ? planned.start[stage] : compiled.horizonMinutes;
-  movable.sort((a, b) => startOf(a) - startOf(b) || planned.finish[a] - planned.finish[b] || a - b);
+  const isLast = compiled.stages.map(({ id }) => (givesWay.has(id) ? 1 : 0));
+  movable.sort(
+    (a, b) => isLast[a] - isLast[b] || startOf(a) - startOf(b) || planned.finish[a] - planned.finish[b] || a - b,
+  );
   return {
     order: Int32Array.from(movable),
     crewChoice: new Int16Array(compiled.stageCount).fill(-1),

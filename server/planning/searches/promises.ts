@@ -1,15 +1,23 @@
-import type { PromisedView, PromiseSearchView } from '@common/contract';
+import type { z } from 'zod';
+import type { PromiseRequest, PromiseSearchView } from '@common/contract';
 import { learnOverrun, NO_FACTOR } from '@common/forecast';
-import type { Promised, ShortWeek } from '@common/promise';
+import { buildUncertainty } from '@common/planning-input';
 import { invalidField, notFound } from '../../http/problem';
 import type { PromiseFound } from '../../jobs/promise-task';
 import type { Actor } from '../../session';
 import type { Transactions } from '../../storage/transactions';
-import { readDesk, type Desk } from '../desk';
+import { readDesk } from '../desk';
 import { FORECAST_SEED } from '../forecast/forecasts';
 import { readPastWork } from '../forecast/past-hours';
+import { minuteOf } from '../snapshot';
+import { answerOf } from './promise-answer';
 import { SearchRepository } from './search-repository';
 import { searchView, type SearchRead, type SearchRuns } from './search-runs';
+
+type Request = z.output<typeof PromiseRequest>;
+
+/** Passes of the generation scheme when everything is levelled with the enquiry: a count, so that the answer can be had again. */
+const MOST_SCHEDULES = 1_500;
 
 /** When productions that the studio is asked for could be ready. */
 export class Promises {
@@ -18,10 +26,13 @@ export class Promises {
     private readonly runs: SearchRuns,
   ) {}
 
-  async start(actor: Actor, productionId: string): Promise<PromiseSearchView> {
+  async start(actor: Actor, { productionId, draws, earliestStart }: Request): Promise<PromiseSearchView> {
     const id = await this.runs.start(actor, async (desk, unit) => {
       const production = desk.rows.productions.find((one) => one.id === productionId);
       if (!production) throw invalidField('/productionId', 'There is no such production that is still to be made.');
+      if (production.state !== 'tentative') {
+        throw invalidField('/productionId', 'Only a tentative production can be asked about. Make it tentative first.');
+      }
       if (!desk.problem.stages.some((stage) => stage.productionId === productionId)) {
         throw invalidField('/productionId', 'It has no stages yet. Add its pieces from recipes, then ask again.');
       }
@@ -31,14 +42,14 @@ export class Promises {
       return {
         name: 'promise',
         task: {
-          snapshot: desk.snapshot,
+          problem: desk.problem,
           plan: desk.plan,
-          now: desk.from,
+          uncertainty: buildUncertainty(desk.snapshot, forecast, learnt),
           productionId,
-          spreads: forecast,
-          overrun: learnt,
-          draws: forecast.draws,
+          earliestStart: earliestStart === null ? null : minuteOf(new Date(earliestStart)),
+          draws: draws ?? forecast.draws,
           seed: FORECAST_SEED,
+          maxSchedules: MOST_SCHEDULES,
         },
         subject: { productionId },
         sentence: `Asked when “${production.name}” could be ready.`,
@@ -71,23 +82,6 @@ export class Promises {
 function viewOf(read: SearchRead, productionId: string): PromiseSearchView {
   const { search, desk } = read;
   const found = search.found as PromiseFound | null;
-  const ways = desk ? (found?.ways ?? []).map((way) => wayView(way, desk)) : [];
-  return { ...searchView(read), productionId, ways };
-}
-
-function wayView({ unplacedStageIds, pushed, shortCrafts, shortBays, ...way }: Promised, desk: Desk): PromisedView {
-  const { names, directory } = desk;
-  const named =
-    (list: readonly { readonly id: string; readonly name: string }[]) =>
-    (week: ShortWeek): PromisedView['shortCrafts'][number] => ({
-      ...week,
-      name: list.find(({ id }) => id === week.id)?.name ?? 'something that is gone',
-    });
-  return {
-    ...way,
-    unplacedStages: unplacedStageIds.map(names.stage),
-    pushed: pushed.map((one) => ({ ...one, name: names.keyDate(one.keyDateId) })),
-    shortCrafts: shortCrafts.map(named(directory.crafts)),
-    shortBays: shortBays.map(named(directory.bays)),
-  };
+  const answer = desk && found?.promised ? answerOf(found.promised, desk) : null;
+  return { ...searchView(read), productionId, answer };
 }

@@ -11,6 +11,7 @@ const OFFICE_PAGES: readonly NavigationPage[] = [
   { path: '/dates', name: 'Dates' },
   { path: '/load', name: 'Load' },
   { path: '/productions', name: 'Productions' },
+  { path: '/enquiries', name: 'Enquiries' },
   { path: '/crew', name: 'Crew' },
   { path: '/bays', name: 'Bays' },
   { path: '/library', name: 'Library' },
