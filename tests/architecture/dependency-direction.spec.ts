@@ -30,6 +30,7 @@ const MAY_IMPORT_IN_COMMON: Readonly<Record<string, readonly string[]>> = {
   contract: ['contract', 'domain'],
   planning: ['planning', 'time', 'dwell', 'domain'],
   forecast: ['forecast', 'planning', 'time', 'dwell', 'domain'],
+  promise: ['promise', 'forecast', 'planning', 'time', 'dwell', 'domain'],
   'planning-input': ['planning-input', 'planning', 'forecast', 'time', 'dwell', 'domain', 'contract'],
 };
 
