@@ -3,6 +3,7 @@ import { dragSuite } from './drag-suite';
 import { forecastSuite } from './forecast-suite';
 import { instanceSuite } from './instance-suite';
 import { levellingSuite } from './levelling-suite';
+import { rescueSuite } from './rescue-suite';
 import { studioSuite } from './studio-suite';
 import type { Suite } from './suite';
 
@@ -49,4 +50,5 @@ export const suites: ReadonlyMap<string, Suite> = new Map<string, Suite>([
   ['drag', dragSuite],
   ['forecast', forecastSuite],
   ['calibration', calibrationSuite],
+  ['rescue', rescueSuite],
 ]);
