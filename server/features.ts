@@ -1,5 +1,6 @@
 import type { FeatureParts } from './app-parts';
 import { Bays, mountBays } from './bays';
+import { Climates, mountClimates } from './climates';
 import { ClientPage, mountClientPage } from './client-page';
 import { Crafts, Leaves, Makers, mountCrew } from './crew';
 import { DaySheets, mountDaySheets } from './day-sheets';
@@ -24,6 +25,7 @@ export function mountFeatures(parts: FeatureParts): void {
     leaves: new Leaves(transactions),
   });
   mountBays(api, new Bays(transactions));
+  mountClimates(api, new Climates(transactions));
   mountLibrary(api, { materials: new Materials(transactions), recipes: new Recipes(transactions) });
   mountPlanning(api, createPlanningParts(parts));
   mountProductions(api, createProductionParts(transactions));

@@ -1,5 +1,6 @@
 import { bayEndpoints } from './bays';
 import { clientPageEndpoints } from './client-page';
+import { climateEndpoints } from './climates';
 import { crewEndpoints } from './crew';
 import { daySheetEndpoints } from './day-sheet';
 import { feedEndpoints } from './feeds';
@@ -21,6 +22,7 @@ export const endpoints = {
   ...studioEndpoints,
   ...crewEndpoints,
   ...bayEndpoints,
+  ...climateEndpoints,
   ...libraryEndpoints,
   ...productionEndpoints,
   ...pieceEndpoints,

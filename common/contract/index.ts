@@ -5,6 +5,7 @@ export * from './session';
 export * from './studio';
 export * from './crew';
 export * from './bays';
+export * from './climates';
 export * from './stage';
 export * from './library';
 export * from './piece';

@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { MEASURE_KINDS, type Measure, type RescueTerms } from '../rescue/measure';
+import { MEASURE_KINDS } from '../domain/measure-kind';
+import type { Measure, RescueTerms } from '../rescue/measure';
 import { ById, endpoint, OFFICE } from './endpoint';
 import { Day, Id, Instant, Minor, MinuteStamp } from './primitives';
 

@@ -1,4 +1,5 @@
-import { MEASURE_KINDS, type RescueTerms } from './measure';
+import { MEASURE_KINDS } from '../domain/measure-kind';
+import type { RescueTerms } from './measure';
 
 /** What a studio begins with; prices in minor units of its currency. Common practice, no source. */
 export const FIRST_TERMS: RescueTerms = {

@@ -1,7 +1,7 @@
 /** The one public file of rescues: changes that would save a key date, with their price. */
 export { FIRST_TERMS } from './first-terms';
-export { MEASURE_KINDS } from './measure';
-export type { Measure, MeasureKind, RescueTerms } from './measure';
+export { MEASURE_KINDS, type MeasureKind } from '../domain/measure-kind';
+export type { Measure, RescueTerms } from './measure';
 export { applyMeasures } from './apply-measures';
 export { priceOf } from './price-of';
 export { proposeMeasures } from './propose-measures';

@@ -1,3 +1,4 @@
+import type { MeasureKind } from '../domain/measure-kind';
 import type { CalendarDay, Minute } from '../time/span';
 
 /**
@@ -53,19 +54,6 @@ export type Measure =
   | { readonly kind: 'part-delivery'; readonly keyDateId: string; readonly pieceIds: readonly string[] }
   /** The date itself moves. */
   | { readonly kind: 'later-date'; readonly keyDateId: string; readonly at: Minute };
-
-export const MEASURE_KINDS = [
-  'overtime',
-  'weekend-shift',
-  'freelancer',
-  'heat',
-  'second-mould',
-  'faster-material',
-  'earlier-sign-off',
-  'part-delivery',
-  'later-date',
-] as const satisfies readonly Measure['kind'][];
-export type MeasureKind = (typeof MEASURE_KINDS)[number];
 
 /** What the studio allows to be proposed, how much of it, and at which prices in minor units. */
 export interface RescueTerms {

@@ -3,7 +3,8 @@ import type { SnapshotMilestone, SnapshotStage, StudioSnapshot } from '../planni
 import { addDays, dayNumber, dayOfInstant } from '../time/calendar-day';
 import type { CalendarDay, Minute } from '../time/span';
 import { instantOfLocal, MINUTES_PER_DAY } from '../time/zone';
-import type { Measure, MeasureKind, RescueTerms } from './measure';
+import type { MeasureKind } from '../domain/measure-kind';
+import type { Measure, RescueTerms } from './measure';
 
 /** What is known of a date at risk when measures are looked for. */
 export interface AtRisk {

@@ -3,6 +3,8 @@ import { AuditEntry } from './audit-entry';
 import { Bay } from './bay';
 import { BayOpening } from './bay-opening';
 import { Client } from './client';
+import { Climate } from './climate';
+import { ClimateReading } from './climate-reading';
 import { Closure } from './closure';
 import { Craft } from './craft';
 import { DateForecast } from './date-forecast';
@@ -47,6 +49,8 @@ export * from './audit-entry';
 export * from './bay';
 export * from './bay-opening';
 export * from './client';
+export * from './climate';
+export * from './climate-reading';
 export * from './closure';
 export * from './craft';
 export * from './date-forecast';
@@ -95,6 +99,8 @@ export const entities = [
   Bay,
   BayOpening,
   Client,
+  Climate,
+  ClimateReading,
   Closure,
   Craft,
   DateForecast,

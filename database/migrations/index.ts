@@ -5,6 +5,7 @@ import { StudioAndPlans1764547204000 } from './1764547204000-studio-and-plans';
 import { FeedState1764547205000 } from './1764547205000-feed-state';
 import { Forecast1764547206000 } from './1764547206000-forecast';
 import { Rescues1764547207000 } from './1764547207000-rescues';
+import { Climates1764547209000 } from './1764547209000-climates';
 
 /** Every migration in its order, listed by hand: a glob would not survive bundling. */
 export const migrations = [
@@ -15,4 +16,5 @@ export const migrations = [
   FeedState1764547205000,
   Forecast1764547206000,
   Rescues1764547207000,
+  Climates1764547209000,
 ] as const;

@@ -1,7 +1,7 @@
 import { fanOf, forecast, type Forecast, type KeyDateForecast, type Uncertainty } from '@common/forecast';
 import type { Plan, Problem } from '@common/planning';
 import type { Minute } from '@common/time/span';
-import type { JobHooks } from './job-message';
+import type { JobHooks } from './job-hooks';
 
 /** A plan to be lived through many times over. */
 export interface ForecastTask {
@@ -26,7 +26,7 @@ export interface ForecastFound extends Pick<Forecast, 'draws' | 'seed' | 'stages
 }
 
 /** Forecasts the plan; a cancel leaves the draws made so far. */
-export function runForecast(task: ForecastTask, hooks: JobHooks<'forecast'>): ForecastFound {
+export function runForecast(task: ForecastTask, hooks: JobHooks<ForecastProgress>): ForecastFound {
   const { problem, plan, uncertainty, fanSteps } = task;
   let begun = 0;
   const shouldStop = () => {

@@ -2,7 +2,8 @@ import type { LevelProgress } from '@common/planning';
 import type { ForecastFound, ForecastProgress, ForecastTask } from './forecast-task';
 import type { LevelFound, LevelTask } from './level-task';
 import type { PromiseFound, PromiseTask } from './promise-task';
-import type { RescueFound, RescueTask, SearchProgress } from './rescue-task';
+import type { SearchProgress } from './job-hooks';
+import type { RescueFound, RescueTask } from './rescue-task';
 
 /** Counts up when a message changes, so that a worker of another build is not misunderstood. */
 export const PROTOCOL = 2;
@@ -35,11 +36,3 @@ export type WorkerMessage<N extends JobName = JobName> =
   | { readonly protocol: typeof PROTOCOL; readonly kind: 'progress'; readonly progress: Jobs[N]['progress'] }
   | { readonly protocol: typeof PROTOCOL; readonly kind: 'found'; readonly found: Jobs[N]['found'] }
   | { readonly protocol: typeof PROTOCOL; readonly kind: 'failed'; readonly failure: string };
-
-/** What a job is given to work with besides its task. */
-export interface JobHooks<N extends JobName> {
-  /** Whether whoever asked no longer wants it, or only what was found so far. */
-  readonly isCancelled: () => boolean;
-  /** Tells how far it has come; often is fine, only some of it is passed on. */
-  readonly tell: (progress: Jobs[N]['progress']) => void;
-}

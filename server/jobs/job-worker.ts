@@ -1,11 +1,12 @@
 import { parentPort } from 'node:worker_threads';
 import { runForecast } from './forecast-task';
-import { PROTOCOL, type JobHooks, type JobMessage, type JobName, type Jobs, type WorkerMessage } from './job-message';
+import type { JobHooks } from './job-hooks';
+import { PROTOCOL, type JobMessage, type JobName, type Jobs, type WorkerMessage } from './job-message';
 import { runLevel } from './level-task';
 import { runPromise } from './promise-task';
 import { runRescue } from './rescue-task';
 
-type Runner<N extends JobName> = (task: Jobs[N]['task'], hooks: JobHooks<N>) => Jobs[N]['found'];
+type Runner<N extends JobName> = (task: Jobs[N]['task'], hooks: JobHooks<Jobs[N]['progress']>) => Jobs[N]['found'];
 
 const RUNNERS: { readonly [N in JobName]: Runner<N> } = {
   level: runLevel,
@@ -19,7 +20,7 @@ function say(message: WorkerMessage): void {
   parentPort?.postMessage(message);
 }
 
-function hooksOf<N extends JobName>(cancel: SharedArrayBuffer): JobHooks<N> {
+function hooksOf<N extends JobName>(cancel: SharedArrayBuffer): JobHooks<Jobs[N]['progress']> {
   const flag = new Int32Array(cancel);
   let lastSaid = -Infinity;
   return {

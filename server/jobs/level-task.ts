@@ -5,11 +5,12 @@ import {
   levelWithinDates,
   measure,
   type LevelOptions,
+  type LevelProgress,
   type LevelResult,
   type Plan,
   type Problem,
 } from '@common/planning';
-import type { JobHooks } from './job-message';
+import type { JobHooks } from './job-hooks';
 
 /** What is to be levelled. */
 export interface LevelTask {
@@ -34,7 +35,7 @@ const SEARCH_SHARE = 0.85;
 const NO_LIMIT = 1_000_000_000;
 
 /** Levels within the time that the task allows. */
-export function runLevel(task: LevelTask, hooks: JobHooks<'level'>): LevelFound {
+export function runLevel(task: LevelTask, hooks: JobHooks<LevelProgress>): LevelFound {
   const begun = performance.now();
   let endedBy: LevelEnd = 'search';
   let searchEnded = task.mode === 'within-dates';

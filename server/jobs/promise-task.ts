@@ -2,7 +2,7 @@ import type { Uncertainty } from '@common/forecast';
 import { promise, type Promised, type PromiseStep } from '@common/promise';
 import type { Plan, Problem } from '@common/planning';
 import type { Minute } from '@common/time/span';
-import type { JobHooks } from './job-message';
+import type { JobHooks, SearchProgress } from './job-hooks';
 
 /** A tentative production to be laid into a plan, to see when it could be delivered. */
 export interface PromiseTask {
@@ -33,7 +33,7 @@ const STEPS: Readonly<Record<PromiseStep, { readonly from: number; readonly unti
 /** Lays the production into the plan both ways and forecasts them; a cancel leaves nothing. */
 export function runPromise(
   { problem, plan, uncertainty, ...asked }: PromiseTask,
-  hooks: JobHooks<'promise'>,
+  hooks: JobHooks<SearchProgress>,
 ): PromiseFound {
   const promised = promise(problem, plan, uncertainty, {
     ...asked,

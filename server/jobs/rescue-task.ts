@@ -1,19 +1,13 @@
 import { searchRescues, type RescueQuestion, type RescuesFound } from '@common/rescue';
-import type { JobHooks } from './job-message';
+import type { JobHooks, SearchProgress } from './job-hooks';
 
 /** A date at risk. */
 export type RescueTask = RescueQuestion;
-
-/** How many measures were weighed so far, of how many. */
-export interface SearchProgress {
-  readonly weighed: number;
-  readonly of: number;
-}
 
 /** What was found, the best first. */
 export type RescueFound = RescuesFound;
 
 /** Looks for what would save the date; a cancel leaves what was found so far. */
-export function runRescue(task: RescueTask, hooks: JobHooks<'rescue'>): RescueFound {
+export function runRescue(task: RescueTask, hooks: JobHooks<SearchProgress>): RescueFound {
   return searchRescues(task, hooks);
 }

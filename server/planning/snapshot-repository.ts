@@ -1,5 +1,6 @@
 import { In, type EntityManager } from 'typeorm';
 import type { Plan } from '@common/planning';
+import type { Span } from '@common/time/span';
 import {
   Bay,
   Closure,
@@ -14,6 +15,11 @@ import {
   Stage,
   Studio,
 } from '@database/entities';
+import { readClimates, type StudioClimates } from '../storage/climates';
+
+const MS_PER_MINUTE = 60_000;
+const MS_PER_DAY = 1440 * MS_PER_MINUTE;
+const MARGIN_DAYS = 60;
 
 const BY_QUERY = { relationLoadStrategy: 'query' } as const;
 
@@ -31,6 +37,7 @@ export interface StudioRows {
   readonly links: readonly Link[];
   readonly purchases: readonly Purchase[];
   readonly issued: Plan | null;
+  readonly climates: StudioClimates;
 }
 
 /** Reads the studio whole; the manager has to be that of a transaction that sees one instant. */
@@ -78,7 +85,22 @@ export async function readStudioRows(manager: EntityManager): Promise<StudioRows
     links: await manager.find(Link, { order: { id: 'ASC' } }),
     purchases: await manager.find(Purchase, { order: { id: 'ASC' } }),
     issued: await readIssued(manager),
+    climates: await readClimates(manager, frameOf(productions)),
   };
+}
+
+/**
+ * Over which time a profile of the seasons is laid out: from well before the productions were entered, for what cures already, to
+ * well after their last date. It hangs on the studio alone, not on the clock, so that the same studio makes the same problem.
+ */
+function frameOf(productions: readonly Production[]): Span {
+  const entered = productions.map(({ createdAt }) => createdAt.getTime());
+  const due = productions.flatMap(({ keyDates }) => keyDates.map(({ at }) => at.getTime()));
+  const start = Math.min(...entered, ...due) - MARGIN_DAYS * MS_PER_DAY;
+  const end = Math.max(...entered, ...due) + MARGIN_DAYS * MS_PER_DAY;
+  return productions.length === 0
+    ? { start: 0, end: 1 }
+    : { start: Math.floor(start / MS_PER_MINUTE), end: Math.floor(end / MS_PER_MINUTE) };
 }
 
 /** The plan that people work to; null before the first issue. */

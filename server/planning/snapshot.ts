@@ -1,6 +1,5 @@
-import { constantClimate } from '@common/dwell/climate';
 import type { SnapshotBay, SnapshotMaker, SnapshotStage, StudioSnapshot } from '@common/planning-input';
-import type { PinValue, Bay, Maker, Stage } from '@database/entities';
+import { ROOM_PLACE, type Bay, type Maker, type PinValue, type Stage } from '@database/entities';
 import { draftOf } from '../storage/drafts';
 import { patternOf } from '../storage/patterns';
 import type { StudioRows } from './snapshot-repository';
@@ -13,14 +12,14 @@ const MS_PER_MINUTE = 60_000;
 /** The studio in the words of the trade, from its rows and the pins of one working plan. */
 export function snapshotOf(rows: StudioRows, pins: Pins): StudioSnapshot {
   const { zone, settings } = rows.studio;
-  const room = { celsius: settings.roomTemperatureCelsius, humidityPercent: settings.roomHumidityPercent };
+  const { history } = rows.climates;
   return {
     zone,
     settings,
     closures: rows.closures.map((closure) => closure.days),
-    room: constantClimate(room),
+    room: history(ROOM_PLACE) ?? [],
     makers: rows.makers.filter((maker) => maker.active).map(makerOf),
-    bays: rows.bays.filter((bay) => bay.active).map((bay) => bayOf(bay, room)),
+    bays: rows.bays.filter((bay) => bay.active).map((bay) => bayOf(bay, history(bay.id))),
     materials: rows.materials.map(({ id, family, dwells, referenceCelsius, referenceHumidityPercent }) => ({
       id,
       family,
@@ -81,17 +80,13 @@ function makerOf(maker: Maker): SnapshotMaker {
   };
 }
 
-function bayOf(bay: Bay, room: { readonly celsius: number; readonly humidityPercent: number }): SnapshotBay {
-  const { temperatureCelsius: celsius, humidityPercent } = bay;
-  const hasOwnClimate = celsius !== null || humidityPercent !== null;
+function bayOf(bay: Bay, climate: SnapshotBay['climate']): SnapshotBay {
   return {
     id: bay.id,
     isMould: bay.pieceId !== null,
     capacity: bay.capacity,
     openings: inOrder(bay.openings).map(patternOf),
-    climate: hasOwnClimate
-      ? constantClimate({ celsius: celsius ?? room.celsius, humidityPercent: humidityPercent ?? room.humidityPercent })
-      : null,
+    climate,
   };
 }
 

@@ -35,6 +35,9 @@ export class Visitor {
   post(path: string, body?: unknown): Promise<Answer> {
     return this.send('POST', path, body);
   }
+  put(path: string, body?: unknown): Promise<Answer> {
+    return this.send('PUT', path, body);
+  }
   patch(path: string, body?: unknown): Promise<Answer> {
     return this.send('PATCH', path, body);
   }

@@ -9,7 +9,9 @@ const shipped = imports.filter(({ from }) => !isTest(from));
  * Types that may be looked up at without depending on the code: the engine's messages are schemas in the contract, and
  * the compiler holds them to the engine's own types.
  */
-const MAY_NAME_TYPES_IN_COMMON: Readonly<Record<string, readonly string[]>> = { contract: ['planning', 'forecast'] };
+const MAY_NAME_TYPES_IN_COMMON: Readonly<Record<string, readonly string[]>> = {
+  contract: ['planning', 'forecast', 'rescue', 'dwell', 'time'],
+};
 
 /** What each part of the house may import from, itself included. */
 const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
@@ -31,6 +33,7 @@ const MAY_IMPORT_IN_COMMON: Readonly<Record<string, readonly string[]>> = {
   planning: ['planning', 'time', 'dwell', 'domain'],
   forecast: ['forecast', 'planning', 'time', 'dwell', 'domain'],
   promise: ['promise', 'forecast', 'planning', 'time', 'dwell', 'domain'],
+  rescue: ['rescue', 'planning-input', 'forecast', 'planning', 'time', 'dwell', 'domain'],
   'planning-input': ['planning-input', 'planning', 'forecast', 'time', 'dwell', 'domain', 'contract'],
 };
 

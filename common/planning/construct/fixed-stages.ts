@@ -1,7 +1,8 @@
 import type { StageBounds } from './bounds-of-stage';
 import { NEVER } from './calendar';
 import { type Compiled, type Crew, FINISHED, FIXED_START, FROZEN, STARTED } from './compiled';
-import type { Ask, Fitter, Leniency } from './fitter';
+import type { Ask, Leniency } from './ask';
+import type { Fitter } from './fitter';
 import { copyFit, type Fit, type Layout, newFit, pushSpan } from './layout';
 import { workMinutes } from './work-minutes';
 

@@ -1,7 +1,7 @@
 import { type Calendar, NEVER } from './calendar';
 import { CommonTime } from './common-time';
 import { CLOCK, FREE, SESSION } from './compiled';
-import type { Ask, Leniency } from './fitter';
+import type { Ask, Leniency } from './ask';
 import { type Fit, type Layout, pushSpan } from './layout';
 
 /** A `free` stage is not split into pieces shorter than this, but for its last. In minutes. */

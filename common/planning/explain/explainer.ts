@@ -15,7 +15,8 @@ import {
   STARTED,
 } from '../construct/compiled';
 import { curedBy } from '../construct/cured-by';
-import { type Ask, Fitter } from '../construct/fitter';
+import type { Ask } from '../construct/ask';
+import { Fitter } from '../construct/fitter';
 import { type Fit, Layout, newFit } from '../construct/layout';
 import { loadPlan } from '../construct/load-plan';
 import type { Reason } from '../problem/explanation';

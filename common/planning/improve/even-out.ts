@@ -1,6 +1,7 @@
 import { StageBounds } from '../construct/bounds-of-stage';
 import { type Crew, FINISH_START, MOVABLE, SOFT_WINDOW } from '../construct/compiled';
-import { type Ask, Fitter } from '../construct/fitter';
+import type { Ask } from '../construct/ask';
+import { Fitter } from '../construct/fitter';
 import { copyFit, type Fit, type Layout, newFit } from '../construct/layout';
 import { workMinutes } from '../construct/work-minutes';
 import type { Budget } from '../stop/budget';

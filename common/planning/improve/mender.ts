@@ -1,7 +1,8 @@
 import { StageBounds } from '../construct/bounds-of-stage';
 import { NEVER } from '../construct/calendar';
 import { type Compiled, type Crew, HOLD_DWELL, HOLD_UNTIL, MOVABLE } from '../construct/compiled';
-import { type Ask, Fitter } from '../construct/fitter';
+import type { Ask } from '../construct/ask';
+import { Fitter } from '../construct/fitter';
 import { owedFor, placeAt } from '../construct/fixed-stages';
 import { copyFit, type Fit, type Layout, newFit } from '../construct/layout';
 import { workMinutes } from '../construct/work-minutes';

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, effect, inject, signal, untracked }
 import { FormControl, FormGroup, Validators } from '@angular/forms';
 import { MatButton } from '@angular/material/button';
 import { endpoints, type RescueSettings, type StudioView } from '@common/contract';
-import { MEASURE_KINDS, type MeasureKind } from '@common/rescue/measure';
+import { MEASURE_KINDS, type MeasureKind } from '@common/domain/measure-kind';
 import { Api, onLiveEvent, readEndpoint } from '../api';
 import { SessionStore } from '../session';
 import { choicesOf } from '../ui/choice-field';

@@ -60,7 +60,6 @@ export class Timeline {
   private point: HandPoint | null = null;
   private slide = 0;
   private swallowClick = false;
-
   /** The stage that the inspector shows. */
   readonly selected = input<string | null>(null);
   readonly chosen = output<string>();

@@ -1,0 +1,1 @@
+export { WEEKDAYS, type Weekday } from '../time/weekday';

@@ -1,0 +1,3 @@
+/** The public file of climates. */
+export { mountClimates } from './climate-routes';
+export { Climates } from './climates';
