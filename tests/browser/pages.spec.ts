@@ -21,6 +21,8 @@ const OFFICE_PAGES = [
   '/crew',
   '/crew/new',
   '/bays',
+  '/bays/climate',
+  '/enquiries',
   '/library',
   '/library/materials/new',
   '/settings',

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
-import { MatButton } from '@angular/material/button';
+import { MatAnchor, MatButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
+import { RouterLink } from '@angular/router';
 import { type BayView, endpoints } from '@common/contract';
 import { firstValueFrom } from 'rxjs';
 import { readEndpoint, reloadOnChange } from '../api';
@@ -15,10 +16,11 @@ import { BAY_KIND_WORDS, saySize } from './words';
 @Component({
   selector: 'fettle-bays-page',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  imports: [MatButton, PageHeading, StatePanel],
+  imports: [MatAnchor, MatButton, PageHeading, RouterLink, StatePanel],
   template: `
     <div class="page">
       <fettle-page-heading title="Bays" lead="The places and machines that work occupies, and how much each holds.">
+        <a matButton="outlined" routerLink="/bays/climate">Climate</a>
         @if (isOffice) {
           <button matButton="filled" type="button" (click)="edit(null)">Add a bay</button>
         }
