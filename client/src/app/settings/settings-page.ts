@@ -19,12 +19,12 @@ import { StudioBoard } from './studio-board';
         <div class="stack">
           <fettle-studio-board />
           <fettle-forecast-board />
-          <fettle-rescue-board />
         </div>
         <div class="stack">
           <fettle-closures-board />
           <fettle-accounts-board />
           <fettle-feeds-board />
+          <fettle-rescue-board />
         </div>
       </div>
     </div>
