@@ -24,12 +24,13 @@ const OFFICE_PAGES = [
   '/bays/climate',
   '/enquiries',
   '/library',
+  '/library/calculator',
   '/library/materials/new',
   '/settings',
   '/day-sheet',
   '/nowhere',
 ];
-const MAKER_PAGES = ['/day-sheet', '/productions', '/crew', '/bays', '/library'];
+const MAKER_PAGES = ['/day-sheet', '/productions', '/crew', '/bays', '/library', '/library/calculator'];
 const CLIENT_PAGES = ['/client'];
 
 describe('every page', () => {
