@@ -17,7 +17,7 @@ export interface JestReport {
   readonly numRuntimeErrorTestSuites: number;
 }
 
-const LIMIT_MS = 8 * 60_000;
+const LIMIT_MS = 11 * 60_000;
 
 /** Runs one project's tests and counts them. */
 export async function runJestProject(name: JestProject, env: Readonly<Record<string, string>>): Promise<Outcome> {
